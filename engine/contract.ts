@@ -49,7 +49,7 @@ export interface BlendProblem {
   candidates: EngineMaterial[];
   /** Ceiling on the price per kg. */
   budgetPerKg?: number;
-  /** Ceiling on the price per 1 unit of impact: the engine's row is sum (c_i - U s_i) z_i <= 0. */
+  /** Ceiling U on the price at equal strength, per 1,000 units of impact (cost per kg / strength per g): row sum (c_i - U s_i) z_i <= 0. */
   costPerImpact?: number;
   /** Least strength per gram. */
   minStrength?: number;
