@@ -67,19 +67,21 @@ CREATE TABLE `limits` (
 	`set_id` char(26) character set ascii collate ascii_bin NOT NULL,
 	`slug` varchar(100) character set ascii collate ascii_bin NOT NULL,
 	`name` varchar(200) NOT NULL,
+	`kind` varchar(16) character set ascii collate ascii_bin NOT NULL,
 	`source` varchar(400) NOT NULL,
-	`via` varchar(10) character set ascii collate ascii_bin NOT NULL,
+	`via` varchar(24) character set ascii collate ascii_bin NOT NULL,
 	`note` text,
 	CONSTRAINT `limits_team_id_id_pk` PRIMARY KEY(`team_id`,`id`),
 	CONSTRAINT `limits_slug` UNIQUE(`team_id`,`set_id`,`slug`),
-	CONSTRAINT `limits_via` CHECK(`limits`.`via` in ('seen','secondary','memory'))
+	CONSTRAINT `limits_kind` CHECK(`limits`.`kind` in ('restriction','prohibition','specification')),
+	CONSTRAINT `limits_via` CHECK(`limits`.`via` in ('document text seen','secondary text seen','memory','invented','computed'))
 );
 --> statement-breakpoint
 CREATE TABLE `product_categories` (
 	`team_id` char(26) character set ascii collate ascii_bin NOT NULL,
 	`code` varchar(8) character set ascii collate ascii_bin NOT NULL,
 	`name` varchar(200) NOT NULL,
-	`leave_on` boolean NOT NULL,
+	`exposure` varchar(20) character set ascii collate ascii_bin NOT NULL,
 	`position` smallint NOT NULL,
 	`source` varchar(300) NOT NULL,
 	CONSTRAINT `product_categories_team_id_code_pk` PRIMARY KEY(`team_id`,`code`)
@@ -129,6 +131,15 @@ CREATE TABLE `material_facets` (
 	CONSTRAINT `material_facets_intensity` CHECK(`material_facets`.`intensity` between 0 and 10 and `material_facets`.`sd` between 0 and 10)
 );
 --> statement-breakpoint
+CREATE TABLE `material_parts` (
+	`team_id` char(26) character set ascii collate ascii_bin NOT NULL,
+	`material_id` char(26) character set ascii collate ascii_bin NOT NULL,
+	`part_id` char(26) character set ascii collate ascii_bin NOT NULL,
+	`share` decimal(10,8) NOT NULL,
+	CONSTRAINT `material_parts_team_id_material_id_part_id_pk` PRIMARY KEY(`team_id`,`material_id`,`part_id`),
+	CONSTRAINT `material_parts_share` CHECK(`material_parts`.`share` > 0 and `material_parts`.`share` <= 1)
+);
+--> statement-breakpoint
 CREATE TABLE `material_synonyms` (
 	`team_id` char(26) character set ascii collate ascii_bin NOT NULL,
 	`material_id` char(26) character set ascii collate ascii_bin NOT NULL,
@@ -150,9 +161,14 @@ CREATE TABLE `materials` (
 	`natural_share` decimal(10,8) NOT NULL,
 	`strength` double NOT NULL,
 	`strength_spread` double NOT NULL,
-	`strength_source` varchar(300) NOT NULL,
+	`strength_class` varchar(16) character set ascii collate ascii_bin NOT NULL,
+	`strength_source` varchar(400) NOT NULL,
+	`vapour_pressure_pa` double,
+	`vapour_pressure_source` varchar(400),
+	`odour_threshold_ug_per_m_3` double,
+	`odour_threshold_source` varchar(400),
 	`evaporation_per_hour` double,
-	`evaporation_source` varchar(300),
+	`evaporation_source` varchar(400),
 	`usual_dilution` decimal(10,8),
 	`dilution_solvent` varchar(80),
 	`max_share` decimal(10,8),
@@ -165,6 +181,8 @@ CREATE TABLE `materials` (
 	CONSTRAINT `materials_kind_known` CHECK(`materials`.`kind` in ('oil','absolute','resinoid','extract','synthetic','isolate','ready base','solvent')),
 	CONSTRAINT `materials_natural` CHECK(`materials`.`natural_share` between 0 and 1),
 	CONSTRAINT `materials_strength` CHECK(`materials`.`strength` >= 0 and `materials`.`strength_spread` >= 1),
+	CONSTRAINT `materials_strength_class` CHECK(`materials`.`strength_class` in ('odourless','faint','weak','medium','strong','very strong','mighty')),
+	CONSTRAINT `materials_measured` CHECK(`materials`.`vapour_pressure_pa` > 0 and `materials`.`odour_threshold_ug_per_m_3` > 0),
 	CONSTRAINT `materials_evaporation` CHECK(`materials`.`evaporation_per_hour` >= 0),
 	CONSTRAINT `materials_dilution` CHECK(`materials`.`usual_dilution` between 0 and 1),
 	CONSTRAINT `materials_max_share` CHECK(`materials`.`max_share` between 0 and 1)
@@ -266,7 +284,7 @@ CREATE TABLE `qualities` (
 	CONSTRAINT `qualities_team_id_id_pk` PRIMARY KEY(`team_id`,`id`),
 	CONSTRAINT `qualities_code` UNIQUE(`team_id`,`supplier_id`,`code`,`grade`),
 	CONSTRAINT `qualities_completeness` CHECK(`qualities`.`completeness` in ('full','declared','unknown')),
-	CONSTRAINT `qualities_form` CHECK(`qualities`.`form` in ('mobile liquid','viscous','paste','crystals','powder','solid')),
+	CONSTRAINT `qualities_form` CHECK(`qualities`.`form` in ('mobile liquid','viscous liquid','paste','crystals','solid')),
 	CONSTRAINT `qualities_density` CHECK(`qualities`.`density_g_per_ml` > 0)
 );
 --> statement-breakpoint
@@ -330,6 +348,8 @@ ALTER TABLE `material_cas` ADD CONSTRAINT `material_cas_material` FOREIGN KEY (`
 ALTER TABLE `material_cautions` ADD CONSTRAINT `material_cautions_material` FOREIGN KEY (`team_id`,`material_id`) REFERENCES `materials`(`team_id`,`id`) ON DELETE cascade ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `material_facets` ADD CONSTRAINT `material_facets_material` FOREIGN KEY (`team_id`,`material_id`) REFERENCES `materials`(`team_id`,`id`) ON DELETE cascade ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `material_facets` ADD CONSTRAINT `material_facets_facet_word` FOREIGN KEY (`team_id`,`facet_id`) REFERENCES `facets`(`team_id`,`id`) ON DELETE restrict ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `material_parts` ADD CONSTRAINT `material_parts_material` FOREIGN KEY (`team_id`,`material_id`) REFERENCES `materials`(`team_id`,`id`) ON DELETE cascade ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `material_parts` ADD CONSTRAINT `material_parts_part` FOREIGN KEY (`team_id`,`part_id`) REFERENCES `materials`(`team_id`,`id`) ON DELETE restrict ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `material_synonyms` ADD CONSTRAINT `material_synonyms_material` FOREIGN KEY (`team_id`,`material_id`) REFERENCES `materials`(`team_id`,`id`) ON DELETE cascade ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `materials` ADD CONSTRAINT `materials_team_id_teams_id_fk` FOREIGN KEY (`team_id`) REFERENCES `teams`(`id`) ON DELETE cascade ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `membership_roles` ADD CONSTRAINT `membership_roles_member` FOREIGN KEY (`team_id`,`user_id`) REFERENCES `memberships`(`team_id`,`user_id`) ON DELETE cascade ON UPDATE no action;--> statement-breakpoint

@@ -25,7 +25,8 @@ export const productCategories = mysqlTable(
       .references(() => teams.id, { onDelete: 'cascade' }),
     code: codeColumn({ length: 8 }).notNull(),
     name: varchar({ length: 200 }).notNull(),
-    leaveOn: boolean().notNull(),
+    /** leave-on, rinse-off, oral, household, no skin contact: our reading, for rules that speak of exposure. */
+    exposure: codeColumn({ length: 20 }).notNull(),
     position: smallint().notNull(),
     source: varchar({ length: 300 }).notNull(),
   },
@@ -59,9 +60,10 @@ export const limits = mysqlTable(
     setId: idColumn().notNull(),
     slug: codeColumn({ length: 100 }).notNull(),
     name: varchar({ length: 200 }).notNull(),
+    kind: codeColumn({ length: 16 }).notNull(),
     source: varchar({ length: 400 }).notNull(),
-    /** seen: read in the named document; secondary: in a text that reprints it; memory: to be checked before use. */
-    via: codeColumn({ length: 10 }).notNull(),
+    /** How the figure got here: read in the document, read in a text that reprints it, or from memory (check it). */
+    via: codeColumn({ length: 24 }).notNull(),
     note: text(),
   },
   (t) => [
@@ -72,7 +74,8 @@ export const limits = mysqlTable(
       columns: [t.teamId, t.setId],
       foreignColumns: [limitSets.teamId, limitSets.id],
     }).onDelete('cascade'),
-    check('limits_via', sql`${t.via} in ('seen','secondary','memory')`),
+    check('limits_kind', sql`${t.kind} in ('restriction','prohibition','specification')`),
+    check('limits_via', sql`${t.via} in ('document text seen','secondary text seen','memory','invented','computed')`),
   ],
 );
 

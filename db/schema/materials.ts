@@ -59,10 +59,15 @@ export const materials = mysqlTable(
     strength: double().notNull(),
     /** The strength is known within this factor, up or down. */
     strengthSpread: double().notNull(),
-    strengthSource: varchar({ length: 300 }).notNull(),
+    strengthClass: codeColumn({ length: 16 }).notNull(),
+    strengthSource: varchar({ length: 400 }).notNull(),
+    vapourPressurePa: double(),
+    vapourPressureSource: varchar({ length: 400 }),
+    odourThresholdUgPerM3: double(),
+    odourThresholdSource: varchar({ length: 400 }),
     /** First-order rate, 1/h; null where nothing is known. */
     evaporationPerHour: double(),
-    evaporationSource: varchar({ length: 300 }),
+    evaporationSource: varchar({ length: 400 }),
     usualDilution: massFraction(),
     dilutionSolvent: varchar({ length: 80 }),
     /** The largest advisable mass share in a concentrate. */
@@ -82,6 +87,11 @@ export const materials = mysqlTable(
     ),
     check('materials_natural', sql`${t.naturalShare} between 0 and 1`),
     check('materials_strength', sql`${t.strength} >= 0 and ${t.strengthSpread} >= 1`),
+    check(
+      'materials_strength_class',
+      sql`${t.strengthClass} in ('odourless','faint','weak','medium','strong','very strong','mighty')`,
+    ),
+    check('materials_measured', sql`${t.vapourPressurePa} > 0 and ${t.odourThresholdUgPerM3} > 0`),
     check('materials_evaporation', sql`${t.evaporationPerHour} >= 0`),
     check('materials_dilution', sql`${t.usualDilution} between 0 and 1`),
     check('materials_max_share', sql`${t.maxShare} between 0 and 1`),
@@ -170,5 +180,30 @@ export const materialCautions = mysqlTable(
       columns: [t.teamId, t.materialId],
       foreignColumns: [materials.teamId, materials.id],
     }).onDelete('cascade'),
+  ],
+);
+
+/** What a ready base is made of, where the house knows it: mass shares of other materials. */
+export const materialParts = mysqlTable(
+  'material_parts',
+  {
+    teamId: idColumn().notNull(),
+    materialId: idColumn().notNull(),
+    partId: idColumn().notNull(),
+    share: massFraction().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.teamId, t.materialId, t.partId] }),
+    foreignKey({
+      name: 'material_parts_material',
+      columns: [t.teamId, t.materialId],
+      foreignColumns: [materials.teamId, materials.id],
+    }).onDelete('cascade'),
+    foreignKey({
+      name: 'material_parts_part',
+      columns: [t.teamId, t.partId],
+      foreignColumns: [materials.teamId, materials.id],
+    }).onDelete('restrict'),
+    check('material_parts_share', sql`${t.share} > 0 and ${t.share} <= 1`),
   ],
 );

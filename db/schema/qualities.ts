@@ -88,7 +88,7 @@ export const qualities = mysqlTable(
       foreignColumns: [suppliers.teamId, suppliers.id],
     }).onDelete('restrict'),
     check('qualities_completeness', sql`${t.completeness} in ('full','declared','unknown')`),
-    check('qualities_form', sql`${t.form} in ('mobile liquid','viscous','paste','crystals','powder','solid')`),
+    check('qualities_form', sql`${t.form} in ('mobile liquid','viscous liquid','paste','crystals','solid')`),
     check('qualities_density', sql`${t.densityGPerMl} > 0`),
   ],
 );
