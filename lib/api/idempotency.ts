@@ -1,0 +1,96 @@
+import 'server-only';
+import { createHash } from 'node:crypto';
+import { and, eq, isNull, lt } from 'drizzle-orm';
+import { db } from '@/db/connection';
+import { idempotencyKeys } from '@/db/schema';
+import type { Member } from '@/lib/auth/member';
+import { ERRNO, errnoOf } from '@/lib/database-error';
+import { Conflict, Invalid } from '@/lib/errors';
+
+/** A claim whose worker died is free again after this. */
+const ABANDONED_MS = 60_000;
+const KEPT_MS = 24 * 3_600_000;
+const WAIT_MS = 10_000;
+const POLL_MS = 60;
+
+interface Claim {
+  ctx: Member;
+  operation: string;
+  key: string | null;
+  text: string;
+  status: number;
+}
+
+interface Settled {
+  status: number;
+  answer: unknown;
+}
+
+/**
+ * Runs the work once for a key of a person, and gives every repeat the first answer.
+ *
+ * The key is claimed by a committed insert; a repeat waits for the first one's answer. Work that throws frees the key.
+ *
+ * @throws Invalid without a key, or when the key came before with another body; Conflict when the first is still at work.
+ */
+export async function answerOnce(claim: Claim, work: () => Promise<unknown>): Promise<Settled> {
+  const { key } = claim;
+  if (!key || key.length > 128)
+    throw new Invalid({ 'Idempotency-Key': 'Send an Idempotency-Key of 1 to 128 characters.' });
+  const bodyHash = createHash('sha256').update(claim.text).digest('hex');
+  if (!(await take({ ...claim, key }, bodyHash))) return firstAnswer({ ...claim, key }, bodyHash);
+  try {
+    const answer = await work();
+    await db
+      .update(idempotencyKeys)
+      .set({ status: claim.status, answer })
+      .where(mine({ ...claim, key }));
+    return { status: claim.status, answer };
+  } catch (error) {
+    await db.delete(idempotencyKeys).where(mine({ ...claim, key }));
+    throw error;
+  }
+}
+
+type Keyed = Claim & { key: string };
+
+const mine = ({ ctx, operation, key }: Keyed) =>
+  and(
+    eq(idempotencyKeys.teamId, ctx.teamId),
+    eq(idempotencyKeys.userId, ctx.userId),
+    eq(idempotencyKeys.operation, operation),
+    eq(idempotencyKeys.key, key),
+  );
+
+/** Whether the key is now ours. */
+async function take(claim: Keyed, bodyHash: string): Promise<boolean> {
+  const { ctx, operation, key } = claim;
+  const now = Date.now();
+  await db.delete(idempotencyKeys).where(and(mine(claim), lt(idempotencyKeys.createdAt, new Date(now - KEPT_MS))));
+  await db
+    .delete(idempotencyKeys)
+    .where(
+      and(mine(claim), isNull(idempotencyKeys.status), lt(idempotencyKeys.createdAt, new Date(now - ABANDONED_MS))),
+    );
+  try {
+    await db.insert(idempotencyKeys).values({ teamId: ctx.teamId, userId: ctx.userId, operation, key, bodyHash });
+    return true;
+  } catch (error) {
+    if (errnoOf(error) === ERRNO.duplicate) return false;
+    throw error;
+  }
+}
+
+async function firstAnswer(claim: Keyed, bodyHash: string): Promise<Settled> {
+  for (const end = Date.now() + WAIT_MS; Date.now() < end; ) {
+    const [row] = await db.select().from(idempotencyKeys).where(mine(claim));
+    if (!row) throw new Conflict('The first request with this key failed. Send it again.');
+    if (row.bodyHash !== bodyHash)
+      throw new Invalid({
+        'Idempotency-Key': 'This key came before with another body. Use a new key for a new request.',
+      });
+    if (row.status !== null) return { status: row.status, answer: row.answer };
+    await new Promise((resolve) => setTimeout(resolve, POLL_MS));
+  }
+  throw new Conflict('The first request with this key is still at work.');
+}

@@ -1,0 +1,111 @@
+import 'server-only';
+import { cookies } from 'next/headers';
+import type { z } from 'zod';
+import { demand, type Member } from '@/lib/auth/member';
+import { isSameOrigin } from '@/lib/auth/origin';
+import { memberOfToken, SESSION_COOKIE } from '@/lib/auth/session';
+import { Invalid } from '@/lib/errors';
+import type { Permission } from '@/lib/shared/permissions';
+import { answerOnce } from './idempotency';
+import { problemResponse, refusal } from './problem';
+
+/** The largest JSON body taken, in bytes. */
+const MAX_BODY_BYTES = 1_000_000;
+
+/** What a route is, as data: the access test and the documents read it. */
+export interface Operation {
+  id: string;
+  permission: Permission;
+  params?: z.ZodType;
+  query?: z.ZodType;
+  body?: z.ZodType;
+  result: z.ZodType;
+  /** The status of success: 200 unless said. */
+  status?: 200 | 201;
+  /** A POST that creates: the client must send an Idempotency-Key, and a repeat gets the first answer. */
+  once?: boolean;
+}
+
+type Parsed<T> = T extends z.ZodType ? z.output<T> : undefined;
+export interface Input<O extends Operation> {
+  params: Parsed<O['params']>;
+  query: Parsed<O['query']>;
+  body: Parsed<O['body']>;
+}
+
+interface RouteContext {
+  params: Promise<Record<string, string | string[] | undefined>>;
+}
+export type RouteHandler = ((request: Request, route: RouteContext) => Promise<Response>) & { operation: Operation };
+
+/**
+ * The one wrapper of all routes: own origin, signed in, permitted, parsed; then one function of lib; then its answer,
+ * through the result's schema so that nothing leaves that the schema does not name.
+ */
+export function teamRoute<const O extends Operation>(
+  operation: O,
+  handler: (ctx: Member, input: Input<O>) => Promise<z.input<O['result']>>,
+): RouteHandler {
+  const route = async (request: Request, { params }: RouteContext): Promise<Response> => {
+    try {
+      if (request.method !== 'GET' && !isSameOrigin(request.headers))
+        return refusal(403, 'Not from here', 'A change must come from Stillroom’s own pages.');
+      const ctx = await memberOfRequest();
+      if (!ctx) return refusal(401, 'Not signed in', 'Sign in to go on.');
+      demand(ctx, operation.permission);
+      const text = operation.body ? await bodyText(request) : '';
+      const input = {
+        params: parse(operation.params, await params),
+        query: parse(operation.query, Object.fromEntries(new URL(request.url).searchParams)),
+        body: parse(operation.body, operation.body ? json(text) : undefined),
+      } as Input<O>;
+      const work = async () => operation.result.parse(await handler(ctx, input));
+      const status = operation.status ?? 200;
+      if (!operation.once) return answer(status, await work());
+      const key = request.headers.get('idempotency-key');
+      const settled = await answerOnce({ ctx, operation: operation.id, key, text, status }, work);
+      return answer(settled.status, settled.answer);
+    } catch (error) {
+      return problemResponse(error);
+    }
+  };
+  return Object.assign(route, { operation });
+}
+
+async function memberOfRequest(): Promise<Member | null> {
+  const token = (await cookies()).get(SESSION_COOKIE)?.value;
+  return token ? memberOfToken(token) : null;
+}
+
+function answer(status: number, body: unknown): Response {
+  return Response.json(body, { status, headers: { 'cache-control': 'no-store' } });
+}
+
+async function bodyText(request: Request): Promise<string> {
+  const type = request.headers.get('content-type') ?? '';
+  if (!type.startsWith('application/json')) throw new Invalid({ body: 'The body must be JSON (application/json).' });
+  const bytes = await request.arrayBuffer();
+  if (bytes.byteLength > MAX_BODY_BYTES) throw new Invalid({ body: 'The body is larger than 1 MB.' });
+  return new TextDecoder().decode(bytes);
+}
+
+function json(text: string): unknown {
+  try {
+    return JSON.parse(text);
+  } catch (cause) {
+    throw new Invalid({ body: `The body is not JSON: ${(cause as Error).message}.` });
+  }
+}
+
+/** @throws Invalid with one sentence for each field at fault. */
+function parse(schema: z.ZodType | undefined, value: unknown): unknown {
+  if (!schema) return undefined;
+  const result = schema.safeParse(value);
+  if (result.success) return result.data;
+  const fields: Record<string, string> = {};
+  for (const issue of result.error.issues) {
+    const path = issue.path.map(String).join('.') || 'body';
+    fields[path] ??= issue.message;
+  }
+  throw new Invalid(fields);
+}
