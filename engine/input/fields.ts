@@ -18,6 +18,8 @@ export interface Span {
 
 export const ANY: Span = { min: -LARGEST, max: LARGEST };
 export const NOT_NEGATIVE: Span = { min: 0, max: LARGEST };
+/** A price per impact: the quotient of two numbers that are themselves in range. */
+export const QUOTIENT: Span = { min: 0, max: LARGEST * LARGEST };
 export const FRACTION: Span = { min: 0, max: 1 };
 const FRACTION_OF_SUMS: Span = { min: 0, max: 1 + FRACTION_ROUNDING };
 

@@ -13,6 +13,7 @@ import {
   checkWhole,
   FRACTION,
   NOT_NEGATIVE,
+  QUOTIENT,
 } from './fields';
 import { checkMaterial, checkRange } from './material';
 
@@ -72,7 +73,7 @@ function checkStageProfiles(profiles: ArrayLike<number>[], path: string, stages:
 
 function checkCeilings(problem: BlendProblem): void {
   checkOptional(problem.budgetPerKg, 'budgetPerKg', NOT_NEGATIVE);
-  checkOptional(problem.costPerImpact, 'costPerImpact', NOT_NEGATIVE);
+  checkOptional(problem.costPerImpact, 'costPerImpact', QUOTIENT);
   checkOptional(problem.minStrength, 'minStrength', NOT_NEGATIVE);
   checkOptional(problem.minNatural, 'minNatural', FRACTION);
   checkOptional(problem.minDose, 'minDose', FRACTION);
