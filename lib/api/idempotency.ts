@@ -2,9 +2,9 @@ import 'server-only';
 import { createHash } from 'node:crypto';
 import { and, eq, isNull, lt } from 'drizzle-orm';
 import { db } from '@/db/connection';
+import { ERRNO, errnoOf } from '@/db/database-error';
 import { idempotencyKeys } from '@/db/schema';
 import type { Member } from '@/lib/auth/member';
-import { ERRNO, errnoOf } from '@/lib/database-error';
 import { Conflict, Invalid } from '@/lib/errors';
 
 /** A claim whose worker died is free again after this. */

@@ -1,12 +1,12 @@
 import 'server-only';
 import { and, eq } from 'drizzle-orm';
 import { db } from '@/db/connection';
+import { ERRNO, errnoOf } from '@/db/database-error';
 import { membershipRoles, memberships, teams, users } from '@/db/schema';
 import { transaction } from '@/db/transaction';
 import { countAttempt } from '@/lib/auth/attempts';
 import { hashPassword, passwordFault, verifyPassword } from '@/lib/auth/password';
 import { startSession } from '@/lib/auth/session';
-import { ERRNO, errnoOf } from '@/lib/database-error';
 import { Invalid, NotFound } from '@/lib/errors';
 import { newId } from '@/lib/id';
 import type { SignUpInput } from '@/lib/shared/people-input';

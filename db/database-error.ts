@@ -1,5 +1,3 @@
-import 'server-only';
-
 /** MariaDB's numbers for refusals that mean something to us. The driver misnames some, so the number is what counts. */
 export const ERRNO = { duplicate: 1062, missingReference: 1452, stillReferenced: 1451, check: 4025 } as const;
 
