@@ -2,34 +2,50 @@ import path from 'node:path';
 import { defineConfig } from 'vitest/config';
 
 const root = path.resolve(import.meta.dirname, '..');
+const support = (file: string) => path.join(root, 'tests/support', file);
+const DATABASE_TESTS = ['tests/db/**/*.test.ts', 'tests/lib/db/**/*.test.ts'];
 
-/** Two projects: `pure` needs nothing beside Node; `database` needs the tests' own MariaDB (DATABASE_URL). */
+/**
+ * Three projects: `pure` needs nothing beside Node; `database` needs MariaDB and starts its own; `browser` drives
+ * Chromium against the built app, which `tests/run.mjs` builds and starts (STILLROOM_URL says where).
+ */
 export default defineConfig({
   root,
   resolve: {
-    alias: {
-      '@': root,
-      'server-only': path.join(root, 'tests/support/server-only.ts'),
-    },
+    alias: { '@': root, 'server-only': support('server-only.ts') },
   },
   test: {
+    testTimeout: 60_000,
+    hookTimeout: 120_000,
+    maxWorkers: 2,
+    setupFiles: support('every-file.ts'),
     projects: [
       {
         extends: true,
         test: {
           name: 'pure',
           include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
-          exclude: ['tests/lib/db/**', 'tests/browser/**'],
-          testTimeout: 60_000,
+          exclude: [...DATABASE_TESTS, 'tests/browser/**'],
         },
       },
       {
         extends: true,
         test: {
           name: 'database',
-          include: ['tests/lib/db/**/*.test.ts'],
-          testTimeout: 60_000,
-          hookTimeout: 120_000,
+          include: DATABASE_TESTS,
+          pool: 'forks',
+          globalSetup: support('database-server.ts'),
+          setupFiles: [support('database-setup.ts')],
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'browser',
+          include: ['tests/browser/**/*.test.ts'],
+          pool: 'forks',
+          maxWorkers: 1,
+          testTimeout: 120_000,
         },
       },
     ],
