@@ -113,6 +113,11 @@ export const constituentFile = z.strictObject({
       otherCas: z.array(z.string()).optional(),
       /** Constituents that the law counts as one, such as the rose ketones. */
       group: key.optional(),
+      /**
+       * A natural complex counted as a whole, such as bergamot oil: limits and labels speak of it beside what it contains.
+       * Its key begins with `whole-`, and it stays out of sums that must not exceed 100 %.
+       */
+      whole: z.literal(true).optional(),
     }),
   ),
 });
@@ -185,17 +190,11 @@ export const categoryFile = z.strictObject({
   ),
 });
 
-/** A term counts a constituent, or a whole material (a natural complex such as bergamot oil). */
-export const limitTerm = z.union([
-  z.strictObject({ constituent: key, factor: z.number().positive() }),
-  z.strictObject({ material: key, factor: z.number().positive() }),
-]);
-
 export const limit = z.strictObject({
   id: key,
   name: z.string(),
   kind: z.enum(['restriction', 'prohibition', 'specification']),
-  terms: z.array(limitTerm).min(1),
+  terms: z.array(z.strictObject({ constituent: key, factor: z.number().positive() })).min(1),
   /** Per cent by mass in the finished product. A category that is missing has no figure here: not the same as no limit. */
   maxPctByCategory: z.record(z.string(), percent),
   /** Categories where the document itself says that there is no restriction. */
@@ -229,7 +228,6 @@ export const allergenFile = z.strictObject({
       labelName: z.string(),
       cas: z.array(z.string()),
       constituents: z.array(key),
-      materials: z.array(key),
       naturalComplex: z.boolean(),
       leaveOnPct: percent,
       rinseOffPct: percent,
