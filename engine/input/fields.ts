@@ -7,7 +7,7 @@ import { EngineInputError } from '../errors';
 
 /** Squares and products of four such numbers still fit into a double, so nothing inside overflows unseen. */
 const LARGEST = 1e15;
-const SMALLEST_STRENGTH = 1e-15;
+const SMALLEST_SIZE = 1e-15;
 /** A fraction that was summed from others may exceed 1 by its rounding. */
 const FRACTION_ROUNDING = 1e-9;
 
@@ -41,10 +41,11 @@ export function checkWhole(value: unknown, path: string, span: Span): number {
   throw new EngineInputError(path, `${path} must be a whole number; it was ${shown(value)}.`);
 }
 
-export function checkStrength(value: unknown, path: string): number {
-  const strength = checkNumber(value, path, NOT_NEGATIVE);
-  if (strength === 0 || strength >= SMALLEST_STRENGTH) return strength;
-  throw new EngineInputError(path, `${path} must be 0 or at least ${SMALLEST_STRENGTH}; it was ${strength}.`);
+/** Strengths and rates are divided by: none is so small that the quotient would overflow. */
+export function checkZeroOrSizeable(value: unknown, path: string): void {
+  const size = checkNumber(value, path, NOT_NEGATIVE);
+  if (size === 0 || size >= SMALLEST_SIZE) return;
+  throw new EngineInputError(path, `${path} must be 0 or at least ${SMALLEST_SIZE}; it was ${size}.`);
 }
 
 export function checkId(value: unknown, path: string): string {

@@ -8,9 +8,9 @@ import {
   checkNumber,
   checkObject,
   checkOptional,
-  checkStrength,
   checkUnique,
   checkVector,
+  checkZeroOrSizeable,
   FRACTION,
   NOT_NEGATIVE,
 } from './fields';
@@ -21,10 +21,10 @@ export function checkMaterial(material: EngineMaterial, path: string, facets?: n
   checkId(material.id, `${path}.id`);
   const size = checkVector(material.profile, `${path}.profile`, ANY, facets);
   if (material.profileSd !== undefined) checkVector(material.profileSd, `${path}.profileSd`, NOT_NEGATIVE, size);
-  checkStrength(material.strength, `${path}.strength`);
+  checkZeroOrSizeable(material.strength, `${path}.strength`);
   checkNumber(material.costPerKg, `${path}.costPerKg`, NOT_NEGATIVE);
   checkOptional(material.natural, `${path}.natural`, FRACTION);
-  checkOptional(material.evaporation, `${path}.evaporation`, NOT_NEGATIVE);
+  if (material.evaporation !== undefined) checkZeroOrSizeable(material.evaporation, `${path}.evaporation`);
   checkRange(material.minShare, material.maxShare, path, ['minShare', 'maxShare']);
   if (material.constituents !== undefined) checkConstituents(material.constituents, `${path}.constituents`);
 }
