@@ -13,3 +13,6 @@ export const facetView = z.strictObject({
 export type FacetView = z.infer<typeof facetView>;
 
 export const facetList = z.strictObject({ items: z.array(facetView) });
+
+/** What a drawing needs of a facet; a `FacetView` is one. */
+export type FacetTone = Pick<FacetView, 'id' | 'name' | 'family' | 'hueDeg' | 'lightness'>;
