@@ -1,0 +1,5 @@
+import { LoadingState } from '../_components/ui/states';
+
+export default function Loading() {
+  return <LoadingState />;
+}
