@@ -1,6 +1,6 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
-import { and, eq, lt, sql } from 'drizzle-orm';
+import { lt, sql } from 'drizzle-orm';
 import { db } from '@/db/connection';
 import { attempts } from '@/db/schema';
 import { TooMany } from '@/lib/errors';
@@ -17,15 +17,13 @@ export async function countAttempt(kind: string, subject: string, most: number):
   const key = createHash('sha256').update(`${kind}\n${subject}`).digest('hex');
   const now = Date.now();
   const windowStart = new Date(now - (now % WINDOW_MS));
-  await db
+  // LAST_INSERT_ID carries this try's own number back, whatever others count at the same moment; 0 is the first.
+  const [{ insertId }] = await db
     .insert(attempts)
     .values({ key, windowStart, count: 1 })
-    .onDuplicateKeyUpdate({ set: { count: sql`${attempts.count} + 1` } });
-  const [row] = await db
-    .select({ count: attempts.count })
-    .from(attempts)
-    .where(and(eq(attempts.key, key), eq(attempts.windowStart, windowStart)));
-  if (row && row.count > most) {
+    .onDuplicateKeyUpdate({ set: { count: sql`last_insert_id(${attempts.count} + 1)` } });
+  const count = Math.max(1, insertId);
+  if (count > most) {
     const waitS = Math.ceil((windowStart.getTime() + WINDOW_MS - now) / 1000);
     throw new TooMany(`Too many tries. Wait ${Math.ceil(waitS / 60)} minutes and try again.`, waitS);
   }
