@@ -4,15 +4,16 @@ import { existsSync, mkdirSync, openSync, readFileSync, rmSync, writeFileSync } 
 import os from 'node:os';
 import path from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
+import { fileURLToPath } from 'node:url';
 import { lastLines, run } from './command.mjs';
 import { SERVER_SETTINGS } from './mariadb-settings.mjs';
 import { ensurePrograms, findProgram } from './packages.mjs';
 import { freePort } from './port.mjs';
+import { inData } from './root.mjs';
 import { CannotGoOn, endWith } from './sentence.mjs';
 
-const ROOT = path.resolve(import.meta.dirname, '..', '..');
-export const PRODUCT_SERVER = { folder: path.join(ROOT, '.data', 'mariadb'), preferredPort: 3316 };
-export const TEST_SERVER = { folder: path.join(ROOT, '.data', 'test', 'mariadb'), preferredPort: 3416 };
+export const PRODUCT_SERVER = { folder: inData('mariadb'), preferredPort: 3316 };
+export const TEST_SERVER = { folder: inData('test', 'mariadb'), preferredPort: 3416 };
 
 const READY_WITHIN_MS = 60_000; // after a crash it first repairs itself
 const STOPPED_WITHIN_MS = 60_000;
@@ -195,4 +196,4 @@ async function main() {
   setInterval(() => {}, 2 ** 30); // the server is no child that keeps us alive
 }
 
-if (process.argv[1] === import.meta.filename) main().catch(endWith);
+if (process.argv[1] === fileURLToPath(import.meta.url)) main().catch(endWith);
