@@ -1,7 +1,8 @@
-import { type SQL, sql } from 'drizzle-orm';
+import { sql } from 'drizzle-orm';
 import { db } from './connection';
 
 type Variables = Map<string, string>;
+type Variable = { Variable_name: string; Value: string };
 
 /** What a server must be set to, and what would happen otherwise: the sentence that a person reads. */
 const REQUIRED: { name: string; wanted: string; holds: (value: string, all: Variables) => boolean; why: string }[] = [
@@ -57,7 +58,7 @@ export async function checkServer(): Promise<void> {
   if (!process.env.DATABASE_URL) {
     throw new UnsafeServer('DATABASE_URL is not set: it names the MariaDB server to work on (npm start sets it).');
   }
-  const faults = serverFaults(await readVariables(sql`show global variables`));
+  const faults = serverFaults(await readVariables());
   if (faults.length > 0) throw new UnsafeServer(`This database server is not safe to work on:\n${faults.join('\n')}`);
 }
 
@@ -68,9 +69,14 @@ export function serverFaults(variables: Variables): string[] {
   );
 }
 
-async function readVariables(statement: SQL): Promise<Variables> {
-  const [rows] = (await db.execute(statement)) as unknown as [{ Variable_name: string; Value: string }[]];
-  return new Map(rows.map((row) => [row.Variable_name, row.Value]));
+async function readVariables(): Promise<Variables> {
+  try {
+    const [rows] = (await db.execute(sql`show global variables`)) as unknown as [Variable[]];
+    return new Map(rows.map((row) => [row.Variable_name, row.Value]));
+  } catch (error) {
+    const reason = error instanceof Error && error.cause instanceof Error ? error.cause.message : String(error);
+    throw new UnsafeServer(`The database server that DATABASE_URL names cannot be used: ${reason}`, { cause: error });
+  }
 }
 
 function is(wanted: string) {

@@ -56,12 +56,12 @@ async function main() {
   stopWhenTold();
   console.log('\nStillroom\n');
   await step('npm packages', ensureNpmPackages);
-  const { databaseUrl } = await (process.env.DATABASE_URL ? otherDatabase() : ownDatabase());
+  const { databaseUrl, people } = await (process.env.DATABASE_URL ? otherDatabase() : ownDatabase());
   if (!options.dev) await step('Build', ensureBuild);
   const app = await step('App', () => serve(options, databaseUrl));
   if (isStopping) return;
   if (options.readyFile) writeFileSync(options.readyFile, JSON.stringify({ url: app.url, pid: process.pid }));
-  console.log(openingWords(app.url));
+  console.log(openingWords(app.url, people));
   await app.ended;
   if (!isStopping) {
     console.error(`The app has ended by itself. Its log: ${logFile}`);
@@ -94,12 +94,14 @@ async function ownDatabase() {
     await grantRows(server);
   });
   await step('Demo house', () => demoOnce(server, appUrl));
-  return { databaseUrl: appUrl };
+  return { databaseUrl: appUrl, people: (await hasDemo(server)) ? demoPeople() : [] };
 }
 
-async function demoOnce({ sql }, appUrl) {
+const hasDemo = async ({ sql }) => (await sql('select count(*) from stillroom.teams where is_demo')) !== '0';
+
+async function demoOnce(server, appUrl) {
   if (!existsSync(inRoot('lib/library/load-demo.ts'))) return 'not part of this version yet';
-  if ((await sql('select count(*) from stillroom.teams where is_demo')) !== '0') return 'kept as it is';
+  if (await hasDemo(server)) return 'kept as it is';
   await loadDemo(appUrl);
   return 'loaded';
 }
@@ -107,7 +109,7 @@ async function demoOnce({ sql }, appUrl) {
 async function otherDatabase() {
   const databaseUrl = process.env.DATABASE_URL;
   await step('Tables', () => migrate(process.env.MIGRATION_DATABASE_URL ?? databaseUrl));
-  return { databaseUrl };
+  return { databaseUrl, people: [] };
 }
 
 async function serve({ host, port, dev }, databaseUrl) {
@@ -116,8 +118,7 @@ async function serve({ host, port, dev }, databaseUrl) {
   return app;
 }
 
-function openingWords(url) {
-  const people = process.env.DATABASE_URL ? [] : demoPeople();
+function openingWords(url, people) {
   const width = Math.max(...people.map((person) => person.name.length));
   const lines = people.map(({ name, roles }) => `    ${name.padEnd(width)}  ${roles.join(', ')}`);
   const demo =

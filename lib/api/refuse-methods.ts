@@ -1,0 +1,32 @@
+import 'server-only';
+import { type IncomingMessage, Server, type ServerResponse } from 'node:http';
+
+const READ = ['GET', 'HEAD'];
+/** Pages take POST for server actions. */
+const PAGE = [...READ, 'POST'];
+const API = [...READ, 'POST', 'PUT', 'PATCH', 'DELETE'];
+
+/** The methods that a path could answer; which of them a route of the API has, Next knows. */
+export function allowedMethods(url: string): string[] {
+  const path = url.split('?')[0] ?? '';
+  if (path.startsWith('/api/')) return API;
+  const isFile = path.startsWith('/_next/') || /\.\w+$/.test(path);
+  return isFile ? READ : PAGE;
+}
+
+/**
+ * Answers 405 to every other method, before Next sees the request: it would answer TRACE with a 500, a changed file
+ * likewise, and render a page for DELETE. Neither `proxy.ts` nor a route is asked early enough, and there is no
+ * server of our own to ask, so the check goes in where Node hands out requests.
+ */
+export function refuseMethods(): void {
+  const emit = Server.prototype.emit as (event: string, ...args: unknown[]) => boolean;
+  Server.prototype.emit = function (this: Server, event: string, ...args: unknown[]) {
+    const [request, response] = args as [IncomingMessage, ServerResponse];
+    if (event !== 'request' || isAllowed(request)) return emit.call(this, event, ...args);
+    response.writeHead(405, { Allow: allowedMethods(request.url ?? '').join(', ') }).end();
+    return true;
+  };
+}
+
+const isAllowed = ({ method = '', url = '' }: IncomingMessage) => allowedMethods(url).includes(method);
