@@ -1,6 +1,7 @@
 export { certify } from './certify/certify';
 export type * from './contract';
 export { EngineInputError } from './errors';
+export { facetHues } from './map/facet-hues';
 export { relatedMaterials } from './map/related-materials';
 export { profileAngle } from './odour/angle';
 export { blendProfile } from './odour/blend-profile';
