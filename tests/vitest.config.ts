@@ -1,9 +1,10 @@
 import path from 'node:path';
 import { defineConfig } from 'vitest/config';
+import { BROWSER_TESTS, DATABASE_TESTS, LONG_TESTS } from './run/projects.mjs';
 
 const root = path.resolve(import.meta.dirname, '..');
 const support = (file: string) => path.join(root, 'tests/support', file);
-const DATABASE_TESTS = ['tests/db/**/*.test.ts', 'tests/lib/db/**/*.test.ts'];
+const long = process.env.LONG ? [] : LONG_TESTS;
 
 /**
  * Three projects: `pure` needs nothing beside Node; `database` needs MariaDB and starts its own; `browser` drives
@@ -25,7 +26,7 @@ export default defineConfig({
         test: {
           name: 'pure',
           include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
-          exclude: [...DATABASE_TESTS, 'tests/browser/**'],
+          exclude: [...DATABASE_TESTS, ...BROWSER_TESTS, ...long],
         },
       },
       {
@@ -33,6 +34,7 @@ export default defineConfig({
         test: {
           name: 'database',
           include: DATABASE_TESTS,
+          exclude: long,
           pool: 'forks',
           globalSetup: support('database-server.ts'),
           setupFiles: [support('database-setup.ts')],
@@ -42,7 +44,8 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'browser',
-          include: ['tests/browser/**/*.test.ts'],
+          include: BROWSER_TESTS,
+          exclude: long,
           pool: 'forks',
           maxWorkers: 1,
           testTimeout: 120_000,

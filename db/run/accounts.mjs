@@ -2,24 +2,24 @@ import { randomBytes } from 'node:crypto';
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 
-const DATABASE = 'stillroom';
+const PRODUCT_DATABASE = 'stillroom';
 
 /**
  * The product's database and its two accounts: one that works with rows, one that may change tables. Passwords are
  * made once and kept beside the database, readable by its owner alone.
  */
-export async function prepareProductDatabase({ sql, port }, folder) {
+export async function prepareProductDatabase({ sql, port }, folder, database = PRODUCT_DATABASE) {
   const passwords = keepPasswords(folder, ['stillroom_app', 'stillroom_migrator']);
   await sql(
     [
-      `create database if not exists ${DATABASE} character set utf8mb4 collate utf8mb4_unicode_ci`,
+      `create database if not exists ${database} character set utf8mb4 collate utf8mb4_unicode_ci`,
       ...Object.entries(passwords).flatMap(([name, password]) => account(name, password)),
-      `grant all on ${DATABASE}.* to ${at('stillroom_migrator')}`,
+      `grant all on ${database}.* to ${at('stillroom_migrator')}`,
     ].join(';\n'),
   );
   return {
-    appUrl: url('stillroom_app', passwords.stillroom_app, port, DATABASE),
-    migrationUrl: url('stillroom_migrator', passwords.stillroom_migrator, port, DATABASE),
+    appUrl: url('stillroom_app', passwords.stillroom_app, port, database),
+    migrationUrl: url('stillroom_migrator', passwords.stillroom_migrator, port, database),
   };
 }
 
@@ -27,12 +27,12 @@ export async function prepareProductDatabase({ sql, port }, folder) {
  * What the app's own account may do, table by table, after a migration. It reads and writes rows, and changes no
  * table. What happened is only ever added to: no statement of the app can alter or remove an activity entry.
  */
-export async function grantRows({ sql }) {
-  const list = await sql(`select table_name from information_schema.tables where table_schema = '${DATABASE}'`);
+export async function grantRows({ sql }, database = PRODUCT_DATABASE) {
+  const list = await sql(`select table_name from information_schema.tables where table_schema = '${database}'`);
   const tables = list.split('\n').filter((name) => name !== '' && !name.startsWith('__'));
   const grants = tables.map((table) => {
     const rights = table === 'activity' ? 'select, insert' : 'select, insert, update, delete';
-    return `grant ${rights} on ${DATABASE}.\`${table}\` to ${at('stillroom_app')}`;
+    return `grant ${rights} on ${database}.\`${table}\` to ${at('stillroom_app')}`;
   });
   await sql(grants.join(';\n'));
 }
