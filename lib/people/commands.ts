@@ -9,6 +9,7 @@ import { hashPassword, passwordFault, verifyPassword } from '@/lib/auth/password
 import { startSession } from '@/lib/auth/session';
 import { Invalid, NotFound } from '@/lib/errors';
 import { newId } from '@/lib/id';
+import { loadLibrary } from '@/lib/library/load-library';
 import type { SignUpInput } from '@/lib/shared/people-input';
 import { ROLES, type Role } from '@/lib/shared/permissions';
 
@@ -31,6 +32,7 @@ export async function signUp(input: SignUpInput): Promise<string> {
       await tx.insert(users).values({ id: userId, email: input.email, name: input.name, passwordHash });
       await tx.insert(memberships).values({ teamId, userId });
       await tx.insert(membershipRoles).values({ teamId, userId, role: 'owner' });
+      await loadLibrary(tx, { teamId, begin: input.begin });
     });
   } catch (error) {
     if (errnoOf(error) === ERRNO.duplicate)

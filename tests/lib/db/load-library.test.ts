@@ -20,9 +20,12 @@ import {
   teams,
 } from '@/db/schema';
 import { transaction } from '@/db/transaction';
+import { memberOfToken } from '@/lib/auth/session';
+import { newId } from '@/lib/id';
 import { readDemoLibrary } from '@/lib/library/demo-files';
 import { makeDemoHouse } from '@/lib/library/demo-house';
 import { loadLibrary } from '@/lib/library/load-library';
+import { signUp } from '@/lib/people/commands';
 import { db, makeTeam } from '../../support/database';
 
 const library = readDemoLibrary();
@@ -111,6 +114,16 @@ it('gives a house that wants only words its facets, constituents and limits, and
   expect(await rowsOf(limitSets, teamId)).toBe(library.limitSets.length);
   expect(await rowsOf(materials, teamId)).toBe(0);
   expect(await rowsOf(suppliers, teamId)).toBe(0);
+});
+
+it('fills the house of somebody who signs up with what they chose to begin with', async () => {
+  const person = { name: 'Ilse Varn', password: 'an iris under seven lamps', currency: 'EUR' as const };
+  for (const begin of ['sample', 'facets'] as const) {
+    const token = await signUp({ ...person, houseName: 'Quiet Moss', email: `${newId()}@house.example`, begin });
+    const owner = await memberOfToken(token);
+    expect(await rowsOf(limits, owner!.teamId)).toBe(library.limitSets.flatMap((set) => set.limits).length);
+    expect(await rowsOf(materials, owner!.teamId)).toBe(begin === 'sample' ? library.materials.length : 0);
+  }
 });
 
 it('leaves nothing behind when the transaction around it fails', async () => {

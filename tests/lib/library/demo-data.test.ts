@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { estimateEvaporation, estimateStrength } from '@/engine';
 import { readDemoLibrary } from '@/lib/library/demo-files';
 import type { DemoProfile } from '@/lib/library/demo-format';
 
@@ -89,6 +90,22 @@ describe('the materials', () => {
     const silent = materials.filter((m) => m.strength.value === 0).map((m) => m.kind);
     expect(new Set(silent)).toEqual(new Set(['solvent']));
     expect(materials.filter((m) => (m.kind === 'solvent') !== (Object.keys(m.profile).length === 0))).toEqual([]);
+  });
+
+  it('put every strength into the class whose own strength is nearest, decade by decade', () => {
+    const wrong = materials.filter(({ strength: { value, class: name } }) => {
+      const estimate = estimateStrength({ strengthClass: name })!.strength;
+      return value === 0 ? estimate !== 0 : Math.abs(Math.log10(value / estimate)) > 0.51;
+    });
+    expect(wrong.map((m) => m.key)).toEqual([]);
+  });
+
+  it('evaporate as their vapour pressure says, wherever one is known', () => {
+    for (const { key, vapourPressure, evaporation } of materials) {
+      if (!vapourPressure) continue;
+      const rate = estimateEvaporation({ vapourPressurePa: vapourPressure.pa25C })!.perHour;
+      expect(evaporation.perHour / Math.min(6, rate), key).toBeCloseTo(1, 1);
+    }
   });
 
   it('say a botanical name and part where they are natural, a chemical name where they are one substance', () => {
