@@ -11,6 +11,8 @@ export { estimateStrength, STRENGTH_CLASSES, twoDigits } from './odour/strength'
 export { agreement } from './panel/agreement';
 export { trianglePower, triangleSimilarity } from './panel/triangle-power';
 export { triangleTest } from './panel/triangle-test';
+export { nnls } from './solve/nnls';
+export { solveBlend } from './solve/solve-blend';
 export { preDilution } from './weigh/pre-dilution';
 export { roundToBalance } from './weigh/round-to-balance';
 export { smallestWeighing } from './weigh/smallest-weighing';

@@ -1,0 +1,70 @@
+import { ActiveSet, type Point } from './active-set';
+import { type Evidence, evidenceOf, liftOdourless } from './evidence';
+import { type Forcing, forcedOut, raiseForcing } from './forced-out';
+import { phaseOne } from './phase-one';
+import type { Prepared } from './prepare';
+
+/** The answer to the convex problem: a blend with its evidence, or the weights of Farkas. */
+export type Closest =
+  | { kind: 'blend'; point: Point; evidence: Evidence; iterations: number }
+  | { kind: 'none'; weights: Float64Array; iterations: number };
+
+/** Amounts below this share of their scale are rounding, and no line of a formula. */
+const NOTHING = 1e-13;
+
+/**
+ * The closest blend under the linear rules: materials that a rule alone keeps out are set aside, phase one finds a
+ * blend that keeps the rules or proves that there is none, the active set goes on to the closest one, and the evidence
+ * is then worked out afresh from the data.
+ */
+export function closest(prepared: Prepared): Closest {
+  const { allowed, steps } = forcedOut(prepared);
+  const start = phaseOne(prepared, { allowed });
+  if (!start.feasible) {
+    return { kind: 'none', weights: farkas(prepared, start.weights, steps, allowed), iterations: start.iterations };
+  }
+  const set = new ActiveSet(prepared, { normal: prepared.strength, allowed });
+  set.begin(start);
+  set.run(50 * (prepared.general + prepared.facets + 50) + prepared.count);
+  const lambda = new Float64Array(prepared.rules.length);
+  for (const [place, r] of set.rows.entries()) {
+    const value = 2 * set.multiplierOf(place);
+    lambda[r] = prepared.rules[r]!.kind === 'exact' ? value : Math.max(0, value);
+  }
+  const point = pointOf(set);
+  const evidence = evidenceOf(prepared, { ...point, lambda, steps, allowed });
+  return { kind: 'blend', point, evidence, iterations: start.iterations + set.iterations };
+}
+
+function pointOf(set: ActiveSet): Point {
+  const kept = set.materials.map((_, k) => k).filter((k) => set.u[k]! > NOTHING);
+  const impact = kept.reduce((sum, k) => sum + set.impactOf(k), 0);
+  return {
+    materials: kept.map((k) => set.materials[k]!),
+    grams: kept.map((k) => set.gramsOf(k) / impact),
+    rows: [...set.rows],
+  };
+}
+
+/** Phase one's weights, scaled so that (G'lambda)_i >= s_i, and with the forcing rules' own weights put in. */
+function farkas(
+  prepared: Prepared,
+  weights: Float64Array,
+  steps: readonly Forcing[],
+  allowed: Uint8Array,
+): Float64Array {
+  const { strength, start, row, entry, base } = prepared;
+  liftOdourless(prepared, weights, allowed);
+  let lift = 0;
+  for (let r = 0; r < weights.length; r++) lift += weights[r]! * base[r]!;
+  let most = 0;
+  for (let i = 0; i < prepared.count; i++) {
+    if (allowed[i] === 0 || strength[i] === 0) continue;
+    let sum = lift;
+    for (let at = start[i]!; at < start[i + 1]!; at++) sum += weights[row[at]!]! * entry[at]!;
+    if (sum > 0) most = Math.max(most, strength[i]! / sum);
+  }
+  const scaled = weights.map((weight) => weight * (most || 1) * (1 + 1e-9));
+  raiseForcing(prepared, steps, scaled, (i) => -strength[i]!);
+  return scaled;
+}
