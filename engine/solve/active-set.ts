@@ -27,7 +27,7 @@ export interface Point {
  * Rockafellar 1976), and steps go on until nothing is left of it.
  */
 const DAMPING = 1e-10;
-const FLOOR = Number(process.env.FLOOR ?? 1e-12);
+const FLOOR = 1e-12;
 /** An amount below 0, or a row above, by this is rounding; amounts are scaled to be at most about 1. */
 const SLIP = 1e-12;
 /** A row this dependent on the others in L^-1 E' says nothing that they do not. */
@@ -37,7 +37,7 @@ const DEPENDENT = 1e-12;
 const RESCALE = 32;
 /** An amount below this, relative to its scale, is rounding. */
 const TRACE = 1e-10;
-const REFINEMENTS = Number(process.env.REF ?? 12);
+const REFINEMENTS = 12;
 
 /**
  * A primal active set in the amounts of the materials in use and the rows that bind (Gill, Murray & Wright 1981,
@@ -234,7 +234,7 @@ export class ActiveSet {
     const block = this.firstBlock();
     for (let k = 0; k < size; k++) {
       const next = u[k]! + block.part * step[k]!;
-      u[k] = next > 0 ? next : 0;
+      u[k] = Math.max(next, 0);
     }
     this.stalled = block.part > 0 ? 0 : this.stalled + 1;
     if (block.part > 0 && this.ignored.length > 0) this.heed();

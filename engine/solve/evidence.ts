@@ -113,7 +113,8 @@ export function liftOdourless(prepared: Prepared, lambda: Float64Array, allowed:
     for (let i = 0; i < prepared.count; i++) {
       if (prepared.strength[i]! > 0 || allowed[i] === 0) continue;
       const short = rowSum(prepared, lambda, i);
-      if (short < 0 && short < -0.5 * ROUNDING * rowSize(prepared, lambda, i)) lifted = raiseDearest(prepared, lambda, { material: i, by: -2 * short }) || lifted;
+      if (short < 0 && short < -0.5 * ROUNDING * rowSize(prepared, lambda, i))
+        lifted = raiseDearest(prepared, lambda, { material: i, by: -2 * short }) || lifted;
     }
     if (!lifted) return;
   }
@@ -127,7 +128,11 @@ function rowSize({ base, start, row, entry }: Prepared, lambda: Float64Array, i:
   return size;
 }
 
-function raiseDearest(prepared: Prepared, lambda: Float64Array, { material, by }: { material: number; by: number }): boolean {
+function raiseDearest(
+  prepared: Prepared,
+  lambda: Float64Array,
+  { material, by }: { material: number; by: number },
+): boolean {
   let best = -1;
   let most = 0;
   for (let r = 0; r < lambda.length; r++) {
