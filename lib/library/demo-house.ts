@@ -38,12 +38,13 @@ async function isThere(): Promise<boolean> {
 async function insertDemoHouse(tx: Transaction, passwordHash: string) {
   const { people } = readDemoLibrary();
   const teamId = newId();
-  await tx.insert(teams).values({ id: teamId, name: people.house.name, currency: people.house.currency, isDemo: true });
+  const { name: houseName, currency } = people.house;
+  await tx.insert(teams).values({ id: teamId, name: houseName, currency, isDemo: true });
   for (const { name, email, roles } of people.members) {
     const userId = newId();
     await tx.insert(users).values({ id: userId, email, name, passwordHash });
     await tx.insert(memberships).values({ teamId, userId });
     await tx.insert(membershipRoles).values(roles.map((role) => ({ teamId, userId, role })));
   }
-  await loadLibrary(tx, { teamId, begin: 'sample' });
+  await loadLibrary(tx, { teamId, begin: 'sample', currency });
 }

@@ -9,6 +9,8 @@ interface Start {
   teamId: string;
   /** sample: everything, with invented ratings and prices; facets: only the words and the limits. */
   begin: 'sample' | 'facets';
+  /** The house's own, ISO 4217: the invented prices count in it, as the same numbers. */
+  currency: string;
 }
 
 /**
@@ -16,7 +18,7 @@ interface Start {
  *
  * @returns the new ids by the keys of the files, empty for what was not wanted.
  */
-export async function loadLibrary(tx: Transaction, { teamId, begin }: Start) {
+export async function loadLibrary(tx: Transaction, { teamId, begin, currency }: Start) {
   const library = readDemoLibrary();
   const words = await loadWords(tx, teamId, library);
   if (begin === 'facets') {
@@ -24,7 +26,10 @@ export async function loadLibrary(tx: Transaction, { teamId, begin }: Start) {
     return { ...words, materialIds: none, supplierIds: none, qualityIds: none };
   }
   const materialIds = await loadMaterials(tx, teamId, library, words.facetIds);
-  const bought = await loadQualities(tx, teamId, library, { materialIds, constituentIds: words.constituentIds });
+  const bought = await loadQualities(tx, { teamId, currency }, library, {
+    materialIds,
+    constituentIds: words.constituentIds,
+  });
   return { ...words, materialIds, ...bought };
 }
 

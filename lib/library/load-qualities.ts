@@ -8,13 +8,19 @@ import type { DemoQuality } from './demo-format';
 import { fractionOfPercent, sourceLine } from './library-text';
 import { type IdByKey, newIds } from './load-words';
 
+interface House {
+  teamId: string;
+  currency: string;
+}
+
 interface Known {
   materialIds: IdByKey;
   constituentIds: IdByKey;
 }
 
 /** The suppliers, their grades of the materials, what those contain, and what they cost in which pack. */
-export async function loadQualities(tx: Transaction, teamId: string, library: DemoLibrary, known: Known) {
+export async function loadQualities(tx: Transaction, house: House, library: DemoLibrary, known: Known) {
+  const { teamId } = house;
   const supplierIds = newIds(library.suppliers.map((s) => s.key));
   const ids = newIds(library.qualities.map((q) => q.key));
   const each = <T>(rowsOf: (quality: DemoQuality, qualityId: string) => T[]): T[] =>
@@ -70,14 +76,14 @@ export async function loadQualities(tx: Transaction, teamId: string, library: De
     tx,
     offers,
     each((q, qualityId) =>
-      q.offers.map(({ packAmount, packUnit, price, currency, date }) => ({
+      q.offers.map(({ packAmount, packUnit, price, date }) => ({
         teamId,
         id: newId(),
         qualityId,
         packAmount: packAmount.toFixed(6),
         packUnit,
         price,
-        currency,
+        currency: house.currency,
         offeredOn: date,
       })),
     ),

@@ -32,7 +32,7 @@ export async function signUp(input: SignUpInput): Promise<string> {
       await tx.insert(users).values({ id: userId, email: input.email, name: input.name, passwordHash });
       await tx.insert(memberships).values({ teamId, userId });
       await tx.insert(membershipRoles).values({ teamId, userId, role: 'owner' });
-      await loadLibrary(tx, { teamId, begin: input.begin });
+      await loadLibrary(tx, { teamId, begin: input.begin, currency: input.currency });
     });
   } catch (error) {
     if (errnoOf(error) === ERRNO.duplicate)

@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { expect, it } from 'vitest';
-import { memberships, users } from '@/db/schema';
+import { facets, materials, memberships, offers, users } from '@/db/schema';
 import { memberOfToken } from '@/lib/auth/session';
 import { Invalid, TooMany } from '@/lib/errors';
 import { newId } from '@/lib/id';
@@ -34,6 +34,21 @@ it('makes a house and its owner, signed in, and lets the owner in again', async 
   expect(owner).toMatchObject({ teamName: 'House of Quiet Moss', userName: 'Ilse Varn', roles: ['owner'] });
   const again = await memberOfToken(await signIn(input));
   expect(again?.teamId).toBe(owner?.teamId);
+});
+
+it('begins with the words and limits alone, or with the sample library priced in the currency of the house', async () => {
+  const empty = await memberOfToken(await signUp(house()));
+  const full = await memberOfToken(await signUp({ ...house(), begin: 'sample', currency: 'SEK' }));
+  const count = async (table: typeof facets | typeof materials | typeof offers, teamId = '') =>
+    (await db.select({ teamId: table.teamId }).from(table).where(eq(table.teamId, teamId))).length;
+  expect(await count(facets, empty?.teamId)).toBeGreaterThan(40);
+  expect(await count(materials, empty?.teamId)).toBe(0);
+  expect(await count(materials, full?.teamId)).toBeGreaterThan(180);
+  const prices = await db
+    .select()
+    .from(offers)
+    .where(eq(offers.teamId, full?.teamId ?? ''));
+  expect(new Set(prices.map((offer) => offer.currency))).toEqual(new Set(['SEK']));
 });
 
 it('leaves nothing behind when the address is taken', async () => {
