@@ -1,10 +1,10 @@
 import 'server-only';
 import { constituents, facets, limitMaxima, limitSets, limits, limitTerms, productCategories } from '@/db/schema';
 import type { Transaction } from '@/db/transaction';
+import { facetHues } from '@/engine';
 import { newId } from '@/lib/id';
 import { insertRows } from './batches';
 import type { DemoLibrary } from './demo-files';
-import { facetHues } from './facet-hues';
 import { fractionOfPercent, sourceLine } from './library-text';
 
 export type IdByKey = ReadonlyMap<string, string>;
@@ -43,13 +43,9 @@ export async function loadWords(tx: Transaction, teamId: string, library: DemoLi
 }
 
 function facetRows(teamId: string, library: DemoLibrary, ids: IdByKey) {
-  const familyIds = library.families.map((family) => family.id);
   const familyName = new Map(library.families.map((family) => [family.id, family.name]));
-  const tones = facetHues(
-    familyIds,
-    library.facets,
-    library.materials.map((m) => m.profile),
-  );
+  const profiles = library.materials.map((m) => library.facets.map((facet) => m.profile[facet.id]?.[0] ?? 0));
+  const colours = facetHues(library.facets, profiles);
   return library.facets.map((facet, position) => ({
     teamId,
     id: ids.get(facet.id)!,
@@ -58,8 +54,8 @@ function facetRows(teamId: string, library: DemoLibrary, ids: IdByKey) {
     family: familyName.get(facet.family)!,
     description: facet.description,
     position,
-    hueDeg: tones.get(facet.id)!.hueDeg.toFixed(3),
-    lightness: tones.get(facet.id)!.lightness.toFixed(3),
+    hueDeg: colours[position]!.hueDeg.toFixed(3),
+    lightness: colours[position]!.lightness.toFixed(3),
   }));
 }
 
