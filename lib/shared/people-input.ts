@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { CURRENCIES } from './currencies';
 
 /** What a person types at the door. Passwords are taken exactly as typed; addresses without the spaces around them. */
 const email = z
@@ -11,8 +12,6 @@ export const signInInput = z.strictObject({
   email,
   password: z.string().min(1, 'Type your password.').max(1024, 'The password is longer than any we take.'),
 });
-
-export const CURRENCIES = ['EUR', 'USD', 'GBP', 'CHF', 'CAD', 'AUD', 'SEK', 'INR'] as const;
 
 export const signUpInput = z.strictObject({
   houseName: z
