@@ -3,7 +3,7 @@ import { neighboursOf } from './related-links';
 
 /** From this intensity on, of 10, we call a facet plainly there: fainter ones are the ground of many smells. */
 export const PLAINLY = 2;
-/** A material leans to the stronger of two facets when the weaker has less than this share of it. */
+/** Two facets stand in balance when the weaker has at least this share of the stronger; otherwise one is leant to. */
 export const IN_BALANCE = 0.5;
 
 export interface Sharer {
@@ -15,15 +15,16 @@ export interface Sharer {
   leansTo: number | null;
 }
 
+/** Holds two facets in balance, so that it leads from one to the other. */
 export interface Bridge extends Sharer {
-  /** How many it is linked to that smell plainly of the first and not of the second, and the other way round. */
+  /** How many it is linked to that lean to the first facet, and to the second. */
   between: [number, number];
 }
 
 export interface WhoShares {
   /** Smell plainly of every chosen facet; those in which the weakest of them is strongest come first. */
   sharers: Sharer[];
-  /** Share both of two facets and are linked to both sides. Empty unless two are chosen. */
+  /** Those in balance; the ones with most links to both sides come first. Empty unless two facets are chosen. */
   bridges: Bridge[];
   /** Of two facets that nobody shares: the most alike pair of materials across. */
   step: { a: string; b: string; similarity: number } | null;
@@ -65,32 +66,29 @@ function leaning([first, second, third]: readonly number[]): number | null {
   return first > second ? 0 : 1;
 }
 
-/** 0: plainly the first and not the second; 1: the other way round. Those of both or neither are not in it. */
-function sidesOf(nodes: readonly Smelt[], first: number, second: number): Map<string, 0 | 1> {
-  const sides = new Map<string, 0 | 1>();
+/** 0: leans to the first, which is plainly there; 1: to the second. The others stand on neither side. */
+function sidesOf(nodes: readonly Smelt[], first: number, second: number): Map<string, number> {
+  const sides = new Map<string, number>();
   for (const node of nodes) {
-    const plainlyFirst = intensityOf(node, first) >= PLAINLY;
-    if (plainlyFirst !== intensityOf(node, second) >= PLAINLY) sides.set(node.id, plainlyFirst ? 0 : 1);
+    const intensities = [intensityOf(node, first), intensityOf(node, second)];
+    const side = leaning(intensities);
+    if (side !== null && Math.max(...intensities) >= PLAINLY) sides.set(node.id, side);
   }
   return sides;
 }
 
-function bridges(sharers: readonly Sharer[], links: readonly RelatedLink[], sides: Map<string, 0 | 1>): Bridge[] {
+function bridges(sharers: readonly Sharer[], links: readonly RelatedLink[], sides: Map<string, number>): Bridge[] {
   const neighbours = neighboursOf(links);
   return sharers
+    .filter(({ leansTo }) => leansTo === null)
     .map((each): Bridge => {
-      const between: [number, number] = [0, 0];
-      for (const { id } of neighbours.get(each.id) ?? []) {
-        const side = sides.get(id);
-        if (side !== undefined) between[side]++;
-      }
-      return { ...each, between };
+      const near = (neighbours.get(each.id) ?? []).map(({ id }) => sides.get(id));
+      return { ...each, between: [near.filter((side) => side === 0).length, near.filter((side) => side === 1).length] };
     })
-    .filter(({ between }) => between[0] > 0 && between[1] > 0)
     .sort((a, b) => Math.min(...b.between) - Math.min(...a.between));
 }
 
-function step(links: readonly RelatedLink[], sides: Map<string, 0 | 1>): WhoShares['step'] {
+function step(links: readonly RelatedLink[], sides: Map<string, number>): WhoShares['step'] {
   let best: WhoShares['step'] = null;
   for (const { a, b, similarity } of links) {
     const [sideA, sideB] = [sides.get(a), sides.get(b)];

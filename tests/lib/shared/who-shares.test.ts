@@ -34,11 +34,24 @@ describe('who shares', () => {
     expect(whoShares(all, [], [ROSY, WOODY, 2]).sharers.every(({ leansTo }) => leansTo === null)).toBe(true);
   });
 
-  it('calls a bridge only what is linked to both sides', () => {
-    const onOneSide = [link('rosewood', 'petal'), link('rosewood', 'bud'), link('pink', 'rosewood')];
-    expect(whoShares(all, onOneSide, [ROSY, WOODY]).bridges).toEqual([]);
-    const { bridges } = whoShares(all, [...onOneSide, link('bark', 'rosewood')], [ROSY, WOODY]);
-    expect(bridges).toMatchObject([{ id: 'rosewood', between: [2, 1] }]);
+  it('calls a bridge what holds both in balance, and counts its links to either side', () => {
+    const links = [
+      link('rosewood', 'petal'),
+      link('rosewood', 'bud'),
+      link('pink', 'rosewood'),
+      link('bark', 'rosewood'),
+    ];
+    const { bridges } = whoShares(all, links, [ROSY, WOODY]);
+    expect(bridges).toMatchObject([{ id: 'rosewood', between: [3, 1] }]);
+    expect(whoShares(all, links, [WOODY, ROSY]).bridges).toMatchObject([{ id: 'rosewood', between: [1, 3] }]);
+  });
+
+  it('puts the bridge with links to both sides before a fuller one that stands alone', () => {
+    const cabinet = node('cabinet', 8, 8);
+    const links = [link('rosewood', 'petal'), link('rosewood', 'bark'), link('cabinet', 'bark')];
+    const { sharers, bridges } = whoShares([...all, cabinet], links, [ROSY, WOODY]);
+    expect(sharers[0]?.id).toBe('cabinet');
+    expect(bridges.map(({ id }) => id)).toEqual(['rosewood', 'cabinet']);
   });
 
   it('finds the shortest step across where nobody shares both', () => {
@@ -64,10 +77,13 @@ describe('who shares', () => {
           new Set(nodes.filter(({ profile }) => (profile[place]?.[1] ?? 0) >= PLAINLY).map(({ id }) => id));
         const [rosy, woody] = [plainly(ROSY), plainly(WOODY)];
         const both = [...rosy].filter((id) => woody.has(id));
-        const { sharers, bridges } = whoShares(nodes, links, [ROSY, WOODY]);
+        const { sharers, bridges, step } = whoShares(nodes, links, [ROSY, WOODY]);
         expect(new Set(sharers.map(({ id }) => id))).toEqual(new Set(both));
-        // Everything is linked to everything here, so each sharer bridges as soon as both sides have somebody.
-        expect(bridges.length).toBe(rosy.size > both.length && woody.size > both.length ? both.length : 0);
+        for (const { intensities, between } of bridges) {
+          expect(2 * Math.min(...intensities)).toBeGreaterThanOrEqual(Math.max(...intensities));
+          expect(between[0] + between[1]).toBeLessThan(nodes.length);
+        }
+        if (both.length > 0) expect(step).toBeNull();
       }),
     );
   });
