@@ -1,6 +1,7 @@
 import { ROLES, type Role } from '@/lib/shared/permissions';
 import type { Method } from '../support/api-routes';
 import type { CanaryHouse } from '../support/canary-house';
+import { MATERIAL_ACCESS } from './access-materials';
 
 /** What a member sends. Made anew for every call, so that one call can't spoil the next. */
 export interface Asked {
@@ -30,6 +31,7 @@ export const ACCESS: readonly Access[] = [
     ask: (house) => ({ query: { by: 'constituents', focus: house.materials[0] } }),
     ids: ['query.focus'],
   },
+  ...MATERIAL_ACCESS,
 ];
 
 /** Routes outside the API of a house, and why they may stand open. */
