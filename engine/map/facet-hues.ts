@@ -10,7 +10,7 @@ export interface FacetHue {
   lightness: number;
 }
 
-/** From dark to light, so far apart as a family of seven allows while each still reads on white and on near-black. */
+/** As far apart as a family of seven needs while each still reads on white and on near-black. */
 const DARKEST = 0.46;
 const LIGHTEST = 0.78;
 
@@ -20,7 +20,7 @@ const LIGHTEST = 0.78;
  *
  * Families are compared by the cosine of their occurrence over the materials (the largest intensity that a material has
  * in the family) and put into circular order by `circleOrder`. The first family listed has hue 0. Within a family the
- * facets keep the listed order from dark to light; alone in a family, a facet stands in the middle.
+ * facets keep the listed order from light to dark, so that a family's main facet, listed first, is its clearest; alone in a family, a facet stands in the middle.
  *
  * @throws EngineInputError if a facet comes twice, a profile has another length, or there are more than 15 families.
  */
@@ -44,7 +44,7 @@ function lightnessOf(id: string, family: string, facets: readonly { id: string; 
   const siblings = facets.filter((facet) => facet.family === family);
   const place = siblings.findIndex((facet) => facet.id === id);
   const part = siblings.length === 1 ? 0.5 : place / (siblings.length - 1);
-  return DARKEST + part * (LIGHTEST - DARKEST);
+  return LIGHTEST - part * (LIGHTEST - DARKEST);
 }
 
 /** 0 where a family never occurs. */

@@ -1,25 +1,31 @@
 import type { FacetTone } from './facet';
 
 /*
- * The one way from a facet to a colour. The hue is the facet's; the lightness is kept where a band can still be told
- * from paper (light) or from near-black (dark); the chroma is the most that sRGB holds there, up to a cap, so that
- * every screen shows the same colour and nothing is clipped.
+ * The one way from a facet to a colour. The hue is the facet's; its lightness is moved to where a band can be told
+ * from paper (light) or from near-black (dark); the chroma is what a watercolour of that depth would have, and never
+ * more than sRGB holds there, so that every screen shows the same colour and nothing is clipped.
  */
 
 type Tone = Pick<FacetTone, 'hueDeg' | 'lightness'>;
 
 const GROUNDS = {
-  light: { darkest: 0.5, lightest: 0.84, maxChroma: 0.135 },
-  dark: { darkest: 0.55, lightest: 0.88, maxChroma: 0.125 },
+  light: { darkest: 0.48, lightest: 0.815, deepest: 0.15, palest: 0.1 },
+  dark: { darkest: 0.52, lightest: 0.84, deepest: 0.14, palest: 0.095 },
 } as const;
 export type Ground = keyof typeof GROUNDS;
 
+/** The lightnesses that `facetHues` gives out; they are spread over what each ground can carry. */
+const GIVEN = { darkest: 0.46, lightest: 0.78 };
+
 /** Lightness, chroma and hue of a facet on one ground. */
 export function facetLch(tone: Tone, ground: Ground): { l: number; c: number; h: number } {
-  const { darkest, lightest, maxChroma } = GROUNDS[ground];
-  const l = Math.min(lightest, Math.max(darkest, tone.lightness));
+  const { darkest, lightest, deepest, palest } = GROUNDS[ground];
+  const part = Math.min(1, Math.max(0, (tone.lightness - GIVEN.darkest) / (GIVEN.lightest - GIVEN.darkest)));
+  const l = darkest + part * (lightest - darkest);
   const h = ((tone.hueDeg % 360) + 360) % 360;
-  return { l, c: Math.min(maxChroma, chromaInGamut(l, h)), h };
+  // A pale tone at full chroma glares beside a pale one whose hue has none to give, as yellow-green does beside violet.
+  const most = deepest + part * (palest - deepest);
+  return { l, c: Math.min(most, chromaInGamut(l, h)), h };
 }
 
 /** For a canvas, which must know its theme; elsewhere `facetColour` follows the theme by itself. */

@@ -1,5 +1,6 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import path from 'node:path';
+import { facetHues } from '@/engine';
 
 const DEMO = path.resolve(import.meta.dirname, '../../db/demo');
 
@@ -37,7 +38,8 @@ const readAll = <T>(folder: string, list: string): T[] =>
 
 /** The part of the sample library that the public page carries, taken from the files that fill the demo house. */
 export function roseSample() {
-  const materials = new Map(readAll<DemoMaterial>('materials', 'materials').map((m) => [m.key, m]));
+  const library = readAll<DemoMaterial>('materials', 'materials');
+  const materials = new Map(library.map((m) => [m.key, m]));
   const qualities = readAll<DemoQuality>('qualities', 'qualities');
   const take = (key: string) => {
     const m = materials.get(key);
@@ -54,7 +56,21 @@ export function roseSample() {
       evaporation: m.evaporation?.perHour,
     };
   };
-  return { target: take(TARGET), candidates: CANDIDATES.map(take) };
+  return { facets: tones(library), target: take(TARGET), candidates: CANDIDATES.map(take) };
+}
+
+/** The facets in the colours that a house gets which begins with the whole library. */
+function tones(library: DemoMaterial[]) {
+  const { facets } = read<{ facets: { id: string; name: string; family: string }[] }>('facets.json');
+  const profiles = library.map((m) => facets.map((facet) => m.profile[facet.id]?.[0] ?? 0));
+  const colours = facetHues(facets, profiles);
+  return facets.map(({ id, name, family }, at) => ({
+    id,
+    name,
+    family,
+    hueDeg: Number(colours[at]?.hueDeg.toFixed(3)),
+    lightness: Number(colours[at]?.lightness.toFixed(3)),
+  }));
 }
 
 /** EUR per kg in the pack that is cheapest by mass. */

@@ -40,8 +40,8 @@ describe('facetColour', () => {
   });
 
   it('follows the theme by itself', () => {
-    expect(facetColour({ hueDeg: 5, lightness: 0.7 })).toMatch(
-      /^light-dark\(oklch\(0\.700 0\.\d{3} 5\.0\), oklch\(0\.700 0\.\d{3} 5\.0\)\)$/,
+    expect(facetColour({ hueDeg: 5, lightness: 0.78 })).toMatch(
+      /^light-dark\(oklch\(0\.815 0\.\d{3} 5\.0\), oklch\(0\.840 0\.\d{3} 5\.0\)\)$/,
     );
   });
 
