@@ -31,13 +31,14 @@ const FLOOR = 1e-12;
 /** An amount below 0, or a row above, by this is rounding; amounts are scaled to be at most about 1. */
 const SLIP = 1e-12;
 /** A row this dependent on the others in L^-1 E' says nothing that they do not. */
-const DEPENDENCE = 1e-9;
-const DEPENDENT = 1e-12;
+const DEPENDENCE = 1e-13;
+const DEPENDENT = 1e-14;
 /** The scale of the amounts is renewed when the mass per unit of impact has changed by this factor. */
 const RESCALE = 32;
 /** An amount below this, relative to its scale, is rounding. */
 const TRACE = 1e-10;
 const REFINEMENTS = 12;
+const LONGEST = 1e12;
 
 /**
  * A primal active set in the amounts of the materials in use and the rows that bind (Gill, Murray & Wright 1981,
@@ -65,6 +66,7 @@ export class ActiveSet {
   zeta = new Float64Array(64);
   private damped = new Float64Array(64);
   readonly residual: Float64Array;
+  private readonly along: Float64Array;
   private gradient = new Float64Array(64);
   private entries = new Float64Array(64);
   private right = new Float64Array(64);
@@ -82,6 +84,7 @@ export class ActiveSet {
   ) {
     this.facets = goal.linear ? 0 : prepared.facets;
     this.residual = new Float64Array(prepared.facets);
+    this.along = new Float64Array(prepared.facets);
     this.value = new Float64Array(prepared.general);
     this.change = new Float64Array(prepared.general);
     this.inRows = new Uint8Array(prepared.rules.length);
@@ -109,24 +112,17 @@ export class ActiveSet {
     while (this.iterations < limit) {
       this.iterations++;
       this.solveStep();
-      const moved = this.advance();
-      if (moved < 1) {
+      if (refinements > REFINEMENTS || (refinements > 0 && this.settled())) {
+        if (this.swept || !this.sweep()) {
+          this.refineMultipliers();
+          return true;
+        }
         refinements = 0;
         continue;
       }
-      if (this.rescaled() || this.release()) {
-        refinements = 0;
-        continue;
-      }
-      if (refinements < REFINEMENTS && !this.settled()) {
-        refinements++;
-        continue;
-      }
-      if (this.swept || !this.sweep()) {
-        this.refineMultipliers();
-        return true;
-      }
-      refinements = 0;
+      if (refinements % 2 === 1) this.stretch();
+      const free = this.advance();
+      refinements = free && !this.rescaled() && !this.release() ? refinements + 1 : 0;
     }
     return false;
   }
@@ -178,15 +174,44 @@ export class ActiveSet {
     return this.prepared.rules[r]!.per === 'mass' ? 1 / this.grams : this.prepared.strengthScale;
   }
 
-  /** Whether the damping left so little that it cannot show in the gap: what it adds to any slope, per unit of impact. */
-  private settled(): boolean {
-    const { step } = this.factor;
-    let most = 0;
+  /**
+   * Along a direction that costs little or no curvature the damping makes steps short, over and over. So a step that
+   * follows a full one is taken as far as the true curvature says, or the ratio test; the next one mends the rows.
+   */
+  private stretch(): void {
+    const { factor, gradient, right, facets, prepared, along } = this;
+    if (this.goal.linear) return;
+    const { step } = factor;
+    right.fill(0, 0, factor.rows);
+    factor.solve(gradient, right);
+    along.fill(0);
+    let slope = 0;
+    let curvature = 0;
     for (let k = 0; k < this.materials.length; k++) {
-      const normal = this.zeta[k]! * this.goal.normal[this.materials[k]!]!;
-      most = Math.max(most, (Math.abs(step[k]!) * this.damped[k]!) / Math.max(normal, 1e-9));
+      const i = this.materials[k]!;
+      const impact = step[k]! * this.zeta[k]! * prepared.strength[i]!;
+      slope -= gradient[k]! * step[k]!;
+      curvature += prepared.variance[i]! * impact * impact;
+      addTo(along, 0, impact, prepared.vectors, i * facets, facets);
     }
-    return most <= 0.1 * this.pricing.tolerance;
+    curvature += product(along, 0, along, 0, facets);
+    const longer = Math.min(slope / curvature, LONGEST);
+    if (longer > 2) for (let k = 0; k < this.materials.length; k++) step[k] = step[k]! * longer;
+  }
+
+  /** Whether nothing is left to gain in the working set: slopes alike, per unit of impact, and rows met. */
+  private settled(): boolean {
+    const { factor, gradient, right, zeta } = this;
+    const size = this.materials.length;
+    for (let r = 0; r < factor.rows; r++) if (Math.abs(right[r]!) > SLIP) return false;
+    for (let k = 0; k < size; k++) this.entries[k] = gradient[k]!;
+    for (let r = 0; r < factor.rows; r++)
+      addTo(this.entries, 0, factor.nu[r]!, factor.coefficients, factor.rowAt(r), size);
+    for (let k = 0; k < size; k++) {
+      const normal = zeta[k]! * this.goal.normal[this.materials[k]!]!;
+      if (Math.abs(this.entries[k]!) > this.pricing.tolerance * Math.max(normal, 1e-9)) return false;
+    }
+    return true;
   }
 
   /** The gradient at u, from the data, and the step and multipliers of the working set. */
@@ -226,8 +251,8 @@ export class ActiveSet {
     return sum;
   }
 
-  /** Goes along the step as far as nothing is broken; what stops it changes the working set. The part gone comes back. */
-  private advance(): number {
+  /** Goes along the step as far as nothing is broken; what stops it changes the working set. True if nothing does. */
+  private advance(): boolean {
     const { factor, u } = this;
     const size = this.materials.length;
     const { step } = factor;
@@ -240,7 +265,7 @@ export class ActiveSet {
     if (block.part > 0 && this.ignored.length > 0) this.heed();
     if (block.material >= 0) this.dropMaterial(block.material);
     else if (block.row >= 0 && !this.tryRow(block.row)) this.ignore(block.row);
-    return block.material >= 0 || block.row >= 0 ? 0 : 1;
+    return block.material < 0 && block.row < 0;
   }
 
   /**

@@ -7,7 +7,7 @@ export type Start =
   | { feasible: false; weights: Float64Array; iterations: number };
 
 /** A blend this near to keeping every rule, relative to its limit, is taken to keep them. */
-const KEPT = 1e-11;
+const KEPT = 2e-10;
 const ROUNDING = 1e-13;
 const DEPENDENCE = 1e-13;
 
