@@ -67,7 +67,10 @@ export function denseRules(p: BlendProblem): DenseRule[] {
   for (const { id, share } of p.kept ?? []) {
     rules.push({ rule: `kept:${id}`, side: 'exact', excess: (m) => has([id])(m) - share, limit: () => share });
   }
-  for (const id of p.required ?? []) min(`required:${id}`, has([id]), () => p.minDose ?? 1e-4);
+  for (const id of p.required ?? []) {
+    const least = Math.max(p.candidates.find((m) => m.id === id)!.minShare ?? 0, p.minDose ?? 1e-4);
+    min(`required:${id}`, has([id]), () => least);
+  }
   return rules;
 }
 
