@@ -1,0 +1,44 @@
+import 'server-only';
+import type { Member } from '@/lib/auth/member';
+import { Invalid } from '@/lib/errors';
+import { listFacets } from '@/lib/facets/queries';
+import { readLimitTables } from '@/lib/limits/queries';
+import { type BlendRequest, RequestFault } from '@/lib/shared/blend-input';
+import { type BuiltProblem, buildBlendProblem } from '@/lib/shared/blend-problem';
+import type { FacetView } from '@/lib/shared/facet';
+import { type Solved, solveInPool } from '@/lib/solving/pool';
+import { listCandidates } from './candidates';
+
+/** Discrete rules can take long; what was found by then is answered with an honest bound. */
+const TIME_LIMIT_MS = 20_000;
+
+export interface SolvedRequest extends Solved {
+  request: BlendRequest;
+  built: BuiltProblem;
+  facets: FacetView[];
+  currency: string;
+}
+
+/** Builds the problem from the house's rows, never from what a client says of them, and solves it. */
+export async function solveRequest(ctx: Member, request: BlendRequest, signal?: AbortSignal): Promise<SolvedRequest> {
+  const [candidates, limits, facets] = await Promise.all([
+    listCandidates(ctx, request.packGrams),
+    readLimitTables(ctx),
+    listFacets(ctx),
+  ]);
+  const built = buildOrRefuse(request, { facetIds: candidates.facetIds, candidates: candidates.items, limits });
+  const { solution, certificate } = await solveInPool(built.problem, { timeLimitMs: TIME_LIMIT_MS, signal });
+  return { request, built, facets, currency: candidates.currency, solution, certificate };
+}
+
+function buildOrRefuse(...args: Parameters<typeof buildBlendProblem>): BuiltProblem {
+  try {
+    return buildBlendProblem(...args);
+  } catch (error) {
+    if (error instanceof RequestFault)
+      throw new Invalid(
+        Object.fromEntries(Object.entries(error.fields).map(([field, words]) => [`request.${field}`, words])),
+      );
+    throw error;
+  }
+}
