@@ -7,6 +7,10 @@ const FINITE = { min: -Number.MAX_VALUE, max: Number.MAX_VALUE };
 const STATUSES: readonly string[] = ['optimal', 'stopped', 'infeasible'];
 const SIDES: readonly unknown[] = [undefined, 'min', 'max'];
 
+/** What an answer says of its blend in numbers; null where it has none. */
+const NUMBERS = ['distance', 'expectedDistance', 'angle', 'costPerKg', 'costPerImpact', 'strength', 'natural'] as const;
+const PROOF_NUMBERS = ['objective', 'bound'] as const;
+
 /** Throws an `EngineInputError` unless the answer has the shape of one to this problem. */
 export function checkSolution(problem: BlendProblem, solution: BlendSolution): void {
   checkObject(solution, 'solution');
@@ -24,6 +28,11 @@ export function checkSolution(problem: BlendProblem, solution: BlendSolution): v
     lines.map((line) => line.id),
     'solution.lines',
   );
+  for (const name of [...NUMBERS, ...PROOF_NUMBERS]) {
+    const value: unknown = solution[name];
+    if (typeof value === 'number' || value === null) continue;
+    throw new EngineInputError(`solution.${name}`, `solution.${name} must be a number, or null without a blend.`);
+  }
   checkMultipliers(solution.prices, 'solution.prices');
   if (solution.farkas !== undefined) checkMultipliers(solution.farkas, 'solution.farkas');
 }

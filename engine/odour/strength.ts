@@ -1,5 +1,5 @@
 import { EngineInputError } from '../errors';
-import { checkList, checkNumber, checkObject, checkOptional } from '../input/fields';
+import { checkList, checkNumber, checkObject, checkOptional, NOT_NEGATIVE } from '../input/fields';
 
 /** From what nobody smells to what fills a room; each class is ten times the one before. */
 export const STRENGTH_CLASSES = ['odourless', 'faint', 'weak', 'medium', 'strong', 'very strong', 'mighty'] as const;
@@ -61,8 +61,13 @@ export function estimateStrength(evidence: StrengthEvidence): StrengthEstimate |
   return strengthClass === undefined ? null : fromClass(strengthClass);
 }
 
-/** A strength as it may be shown: two digits, because no more are known. */
+/**
+ * A strength as it may be shown: two digits, because no more are known.
+ *
+ * @throws EngineInputError if it is not a number from 0.
+ */
 export function twoDigits(strength: number): number {
+  checkNumber(strength, 'strength', NOT_NEGATIVE);
   return Number(strength.toPrecision(2));
 }
 

@@ -117,9 +117,10 @@ class ActiveSet {
 }
 
 function unitColumns(a: Matrix, b: ArrayLike<number>) {
-  if (a.rows !== b.length)
-    throw new EngineInputError('b', `b must have ${a.rows} numbers, as A has rows; it had ${b.length}.`);
-  const rightSide = Float64Array.from(b);
+  if (typeof a?.get !== 'function') throw new EngineInputError('a', 'a must be a Matrix of ml-matrix.');
+  if (typeof b !== 'object' || b === null || a.rows !== b.length)
+    throw new EngineInputError('b', `b must have ${a.rows} numbers, as A has rows.`);
+  const rightSide = Float64Array.from({ length: a.rows }, (_, i) => (typeof b[i] === 'number' ? b[i] : Number.NaN));
   const bad = rightSide.findIndex((value) => !Number.isFinite(value));
   if (bad >= 0) throw new EngineInputError(`b[${bad}]`, `b[${bad}] must be finite; it was ${rightSide[bad]}.`);
   const lengths = new Float64Array(a.columns);
