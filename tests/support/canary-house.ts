@@ -102,11 +102,11 @@ async function insertOffers(teamId: string, ids: Ids) {
     const qualityId = ids.qualities[place] as string;
     await db.insert(qualities).values({
       ...{ teamId, id: qualityId, materialId, supplierId: ids.supplier, code: `HERONMERE-${place}` },
-      ...{ grade: 'usual', completeness: 'full', compositionSource: 'Invented', form: 'mobile liquid' },
+      ...{ grade: 'usual', completeness: 'full', compositionSource: 'Heronmere analysis', form: 'mobile liquid' },
       densityGPerMl: '0.9000',
     });
     await db.insert(qualityConstituents).values({
-      ...{ teamId, qualityId, constituentId: ids.constituent, source: 'Invented' },
+      ...{ teamId, qualityId, constituentId: ids.constituent, source: 'Heronmere analysis' },
       ...{ minFraction: '0.1', typicalFraction: '0.2', maxFraction: '0.3' },
     });
     await db.insert(offers).values({

@@ -93,6 +93,18 @@ const FOREIGN_ORIGINS: Record<string, string>[] = [
   { origin: 'https://elsewhere.example' },
 ];
 
+it('searches for what somebody may know: the price and the supplier do reach those who may have them', async () => {
+  const seen = { owner: '', safety: '' };
+  for (const line of ACCESS.filter(({ method }) => method === 'GET')) {
+    for (const role of ['owner', 'safety'] as const) {
+      seen[role] += (await send(line, await line.ask(own), { token: own.tokens[role] })).text;
+    }
+  }
+  expect(found(seen.owner, PRICE_CANARIES)).toContain(PRICE_CANARIES[0]);
+  expect(found(seen.owner, SUPPLIER_CANARIES)).toEqual(SUPPLIER_CANARIES);
+  expect(found(seen.safety, SUPPLIER_CANARIES)).toEqual(SUPPLIER_CANARIES);
+});
+
 it('refuses every change that doesn’t come from our own pages', async () => {
   for (const line of ACCESS.filter(({ method }) => method !== 'GET')) {
     for (const headers of FOREIGN_ORIGINS) {
