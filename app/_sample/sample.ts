@@ -30,3 +30,6 @@ export const sampleProfile = (material: SampleMaterial): number[] =>
 
 export const sampleSpread = (material: SampleMaterial): number[] =>
   SAMPLE.facets.map((facet) => material.profile[facet.id]?.[1] ?? 0);
+
+/** "Rose absolute" of "Rose absolute (Rosa x damascena)": the Latin is set apart, in its own face. */
+export const shortName = (material: SampleMaterial): string => material.name.replace(/ \(.*\)$/, '');

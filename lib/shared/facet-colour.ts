@@ -36,8 +36,15 @@ export function facetColourOn(tone: Tone, ground: Ground): string {
 
 /** A CSS colour that follows the theme: for `style`, as in `{ '--facet': facetColour(tone) }` or `{ fill: ... }`. */
 export function facetColour(tone: Tone): string {
-  return `light-dark(${facetColourOn(tone, 'light')}, ${facetColourOn(tone, 'dark')})`;
+  const known = colours.get(tone);
+  if (known) return known;
+  const colour = `light-dark(${facetColourOn(tone, 'light')}, ${facetColourOn(tone, 'dark')})`;
+  colours.set(tone, colour);
+  return colour;
 }
+
+/** A facet keeps its colour and is asked for it at every band of every strip. */
+const colours = new WeakMap<Tone, string>();
 
 /** The largest chroma at this lightness and hue that sRGB can show, by bisection to 1/2000. */
 export function chromaInGamut(l: number, h: number): number {
