@@ -1,4 +1,5 @@
 import { ANY, checkVector, NOT_NEGATIVE } from '../input/fields';
+import { arctangent } from '../portable/arctangent';
 
 /**
  * The angle between two facet profiles under the facets' weights, in radians; null where a profile is zero, because
@@ -22,7 +23,7 @@ export function profileAngle(a: ArrayLike<number>, b: ArrayLike<number>, weights
     difference += (u[facet]! - v[facet]!) ** 2;
     sum += (u[facet]! + v[facet]!) ** 2;
   }
-  return 2 * Math.atan2(Math.sqrt(difference), Math.sqrt(sum));
+  return 2 * arctangent(Math.sqrt(difference), Math.sqrt(sum));
 }
 
 /** Scaled by the largest value first, so that no square of a tiny profile vanishes. */

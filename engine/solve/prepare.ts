@@ -1,4 +1,5 @@
 import type { BlendProblem, EngineMaterial } from '../contract';
+import { exponential } from '../portable/exponential';
 import { type Rule, rulesOf } from './rules';
 
 /**
@@ -84,7 +85,7 @@ function addStage(
   for (let i = 0; i < materials.length; i++) {
     const material = materials[i]!;
     const profile = (problem.stages && material.stageProfiles?.[index]) || material.profile;
-    const left = stage.hours === 0 ? 1 : Math.exp(-(material.evaporation ?? 0) * stage.hours);
+    const left = stage.hours === 0 ? 1 : exponential(-(material.evaporation ?? 0) * stage.hours);
     scaleInto(vectors, i * facets + index * width, profile, { roots, left });
     if (material.profileSd) variance[i]! += left * left * weightedSquares(material.profileSd, weights);
   }

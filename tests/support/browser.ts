@@ -26,6 +26,11 @@ export function houseUrl(): string {
   return url;
 }
 
+/** Debian's Chromium, as all browser tests use it. */
+export function launchChromium(): Promise<Browser> {
+  return chromium.launch({ executablePath: findProgram('chromium') ?? undefined, args: FLAGS });
+}
+
 interface Visit extends BrowserContextOptions {
   /** Who is signed in; nobody by default. */
   as?: Member;
@@ -44,8 +49,7 @@ export function browserForFile() {
   let visits: { context: BrowserContext; page: Page; complaints: string[] }[] = [];
 
   beforeAll(async () => {
-    const executablePath = findProgram('chromium') ?? undefined;
-    browser = await chromium.launch({ executablePath, args: FLAGS });
+    browser = await launchChromium();
   });
   afterAll(async () => {
     await browser?.close();
