@@ -29,7 +29,7 @@ export function FacetQuestion({ map, view }: { map: RelatedMap; view: MapView })
       aria-label="Who shares which facets"
       className="flex flex-wrap items-center gap-x-8 gap-y-3 border-t border-grout px-5 py-4 md:px-8"
     >
-      <div className="flex flex-wrap items-end gap-3">
+      <div className="grid w-full grid-cols-2 items-end gap-3 xs:flex xs:w-auto xs:flex-wrap">
         {Array.from({ length: slots }, (_, slot) => (
           <Combobox
             // biome-ignore lint/suspicious/noArrayIndexKey: a slot is its place in the sentence
@@ -40,7 +40,7 @@ export function FacetQuestion({ map, view }: { map: RelatedMap; view: MapView })
             onChange={(slug) => put(slot, slug)}
             placeholder={slot === 0 ? 'a facet' : slot === 1 ? 'another facet' : 'a third'}
             lead={(item) => <FacetSwatch facet={facetOf.get(item.id)} />}
-            className="w-full xs:w-48"
+            className="min-w-0 xs:w-48"
           />
         ))}
         {smells.length > 0 ? (

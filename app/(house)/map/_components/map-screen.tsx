@@ -4,6 +4,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useEffect, useMemo, useState } from 'react';
 import { ButtonLink } from '@/app/_components/ui/button';
 import { Choice } from '@/app/_components/ui/choice';
+import { classNames } from '@/app/_components/ui/class-names';
 import { Sheet } from '@/app/_components/ui/dialog';
 import { ScreenHead } from '@/app/_components/ui/screen';
 import { EmptyState, ErrorState, LoadingState } from '@/app/_components/ui/states';
@@ -52,6 +53,8 @@ function Loaded({ map, mayBlend }: { map: RelatedMap; mayBlend: boolean }) {
   const panel = view.selected ? (
     <MaterialPanel material={view.selected} map={map} view={view} mayBlend={mayBlend} onSelect={select} />
   ) : null;
+  // The table says all that the list does; what is picked from it still has its sheet, and its kin.
+  const hasSide = state.view === 'graph' || panel !== null;
   return (
     <>
       <ScreenHead
@@ -71,7 +74,12 @@ function Loaded({ map, mayBlend }: { map: RelatedMap; mayBlend: boolean }) {
         }
       />
       <FacetQuestion map={map} view={view} />
-      <div className="tiles md:grid-cols-[17rem_minmax(0,1fr)] xl:grid-cols-[17rem_minmax(0,1fr)_19rem]">
+      <div
+        className={classNames(
+          'tiles md:grid-cols-[17rem_minmax(0,1fr)]',
+          hasSide && 'xl:grid-cols-[17rem_minmax(0,1fr)_19rem]',
+        )}
+      >
         <MapControls map={map} all={all} view={view} />
         <div className="order-first min-h-[26rem] md:order-none">
           {state.view === 'table' ? (
@@ -80,7 +88,7 @@ function Loaded({ map, mayBlend }: { map: RelatedMap; mayBlend: boolean }) {
             <Graph map={map} all={all} view={view} active={active} onSelect={select} />
           )}
         </div>
-        <aside aria-label="On the map" className="md:col-span-2 xl:col-span-1">
+        <aside aria-label="On the map" className="md:col-span-2 xl:col-span-1" hidden={!hasSide}>
           {narrow ? (
             <Sheet open={panel !== null} onOpenChange={(open) => !open && select(null)} title={view.selected?.name}>
               {panel}

@@ -64,6 +64,8 @@ export function MapTable({ map, view, onSelect }: MapTableProps) {
             return row ? (
               <tr
                 key={row.material.id}
+                ref={virtual.measureElement}
+                data-index={index}
                 aria-rowindex={index + 2}
                 className={classNames('h-14 hover:bg-wash', row.material.id === view.selected?.id && 'bg-wash')}
               >

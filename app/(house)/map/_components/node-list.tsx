@@ -33,6 +33,7 @@ export function NodeList({ view, map, onActive, onSelect }: NodeListProps) {
     getScrollElement: () => scroller.current,
     estimateSize: () => ROW_HEIGHT,
     overscan: 8,
+    initialRect: { width: 300, height: 480 },
   });
   // biome-ignore lint/correctness/useExhaustiveDependencies: another list begins at its top
   useEffect(() => {
