@@ -10,8 +10,8 @@ export interface Goal {
   linear?: Float64Array;
   /** Materials that may be used; all where missing. */
   allowed?: Uint8Array;
-  /** A rule that is left aside. */
-  without?: number;
+  /** 1 for the rules that are left aside; none where missing. */
+  left?: Uint8Array;
 }
 
 /** A point to start from: the materials in use with their grams z, and rows that may bind. */
@@ -30,6 +30,8 @@ const DAMPING = 1e-10;
 const FLOOR = 1e-12;
 /** An amount below 0, or a row above, by this is rounding; amounts are scaled to be at most about 1. */
 const SLIP = 1e-12;
+/** A row this near to its limit may be taken to bind. */
+const NEAR = 1e-9;
 /** A row this dependent on the others in L^-1 E' says nothing that they do not. */
 const DEPENDENCE = 1e-13;
 const DEPENDENT = 1e-14;
@@ -39,6 +41,8 @@ const RESCALE = 32;
 const TRACE = 1e-10;
 const REFINEMENTS = 12;
 const LONGEST = 1e12;
+/** Steps of no length after which the working set may be going round in circles. */
+const PATIENCE = 40;
 
 /**
  * A primal active set in the amounts of the materials in use and the rows that bind (Gill, Murray & Wright 1981,
@@ -103,7 +107,8 @@ export class ActiveSet {
     this.grams = point.grams.reduce((total, z) => total + z, 0) / sum;
     this.factor.addRow(this.entries);
     for (const [k, i] of point.materials.entries()) this.addMaterial(i, point.grams[k]! / sum);
-    for (const r of point.rows) this.tryRow(r);
+    this.ignored.length = 0;
+    for (const r of point.rows) if (this.binds(r)) this.tryRow(r);
   }
 
   /** Runs to the optimum, or until `limit` steps are done; true if it got there. */
@@ -311,10 +316,10 @@ export class ActiveSet {
   private eachRow(visit: (row: number, value: number, change: number) => void): void {
     const { prepared, value, change, inRows, goal } = this;
     for (let r = 0; r < prepared.general; r++) {
-      if (inRows[r] === 0 && r !== goal.without) visit(r, value[r]!, change[r]!);
+      if (inRows[r] === 0 && !goal.left?.[r]) visit(r, value[r]!, change[r]!);
     }
     for (const { row, now, delta } of this.own) {
-      if (inRows[row] === 0 && row !== goal.without) visit(row, now, delta);
+      if (inRows[row] === 0 && !goal.left?.[row]) visit(row, now, delta);
     }
   }
 
@@ -355,16 +360,21 @@ export class ActiveSet {
     }
   }
 
-  /** Frees the row or takes in the material with the most negative multiplier; false if there is none. */
+  /**
+   * Frees the row or takes in the material with the most negative multiplier; false if there is none. After many steps
+   * of no length it is the first by number instead, which cannot go round in circles (Bland 1977).
+   */
   private release(): boolean {
     const { factor, prepared, pricing } = this;
+    const circling = this.stalled > PATIENCE;
     this.computeResidual();
     if (!this.goal.linear) pricing.setScale(0.5 * Math.max(prepared.targetSize, this.objective()));
     let worst = -1;
     let least = 0;
     for (const [place, r] of this.rows.entries()) {
       const nu = factor.nu[place + 1]!;
-      if (prepared.rules[r]!.kind !== 'exact' && nu < least && nu < -pricing.rowTolerance) [worst, least] = [place, nu];
+      if (prepared.rules[r]!.kind === 'exact' || nu >= -pricing.rowTolerance) continue;
+      if (circling ? worst < 0 || r < this.rows[worst]! : nu < least) [worst, least] = [place, nu];
     }
     if (worst >= 0) {
       this.inRows[this.rows[worst]!] = 0;
@@ -373,7 +383,7 @@ export class ActiveSet {
       return true;
     }
     pricing.setMultipliers(this);
-    const best = pricing.best(this);
+    const best = circling ? pricing.first(this) : pricing.best(this);
     if (best < 0) return false;
     this.addMaterial(best, 0);
     return true;
@@ -413,7 +423,7 @@ export class ActiveSet {
     for (let r = this.factor.dependentRow(DEPENDENT); r > 0; r = this.factor.dependentRow(DEPENDENT)) {
       const [row] = this.rows.splice(r - 1, 1);
       this.factor.removeRow(r);
-      this.ignore(row!);
+      this.inRows[row!] = 0;
     }
   }
 
@@ -451,6 +461,15 @@ export class ActiveSet {
   private heed(): void {
     for (const r of this.ignored) this.inRows[r] = 0;
     this.ignored.length = 0;
+  }
+
+  /** Whether the blend is at the row's limit, and not short of it. */
+  private binds(r: number): boolean {
+    let value = 0;
+    for (let k = 0; k < this.materials.length; k++) {
+      value += this.coefficient(r, this.materials[k]!, this.zeta[k]!) * this.u[k]!;
+    }
+    return this.prepared.rules[r]!.kind === 'exact' || value > -NEAR;
   }
 
   private coefficient(r: number, i: number, zeta: number): number {

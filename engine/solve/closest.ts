@@ -1,7 +1,7 @@
 import { ActiveSet, type Point } from './active-set';
-import { type Evidence, evidenceOf, liftOdourless } from './evidence';
+import { type Evidence, evidenceOf, liftOdourless, worstViolation } from './evidence';
 import { type Forcing, forcedOut, raiseForcing } from './forced-out';
-import { phaseOne } from './phase-one';
+import { phaseOne, type Start } from './phase-one';
 import type { Prepared } from './prepare';
 
 /** The answer to the convex problem: a blend with its evidence, or the weights of Farkas. */
@@ -11,15 +11,24 @@ export type Closest =
 
 /** Amounts below this share of their scale are rounding, and no line of a formula. */
 const NOTHING = 1e-13;
+/** A near answer that breaks no rule by more than this can be gone on from. */
+const STILL_KEPT = 1e-11;
+
+export interface Around {
+  /** 1 for the materials that may be used at all; all where missing. The bound holds among them. */
+  among?: Uint8Array;
+  /** An answer to a problem much like this one. */
+  near?: Point;
+}
 
 /**
  * The closest blend under the linear rules: materials that a rule alone keeps out are set aside, phase one finds a
  * blend that keeps the rules or proves that there is none, the active set goes on to the closest one, and the evidence
  * is then worked out afresh from the data.
  */
-export function closest(prepared: Prepared): Closest {
-  const { allowed, steps } = forcedOut(prepared);
-  const start = phaseOne(prepared, { allowed });
+export function closest(prepared: Prepared, { among, near }: Around = {}): Closest {
+  const { allowed, steps } = forcedOut(prepared, among);
+  const start = startFrom(prepared, allowed, near);
   if (!start.feasible) {
     return { kind: 'none', weights: farkas(prepared, start.weights, steps, allowed), iterations: start.iterations };
   }
@@ -32,8 +41,20 @@ export function closest(prepared: Prepared): Closest {
     lambda[r] = prepared.rules[r]!.kind === 'exact' ? value : Math.max(0, value);
   }
   const point = pointOf(set);
-  const evidence = evidenceOf(prepared, { ...point, lambda, steps, allowed });
+  const evidence = evidenceOf(prepared, { ...point, lambda, steps, allowed, ...(among ? { among } : {}) });
   return { kind: 'blend', point, evidence, iterations: start.iterations + set.iterations };
+}
+
+/** The near answer where it keeps the rules as it is, or phase one from it; its materials that are out now are left. */
+export function startFrom(prepared: Prepared, allowed: Uint8Array, near?: Point): Start {
+  if (!near) return phaseOne(prepared, { allowed });
+  const left = near.materials.map((_, k) => k).filter((k) => allowed[near.materials[k]!] === 1);
+  const materials = left.map((k) => near.materials[k]!);
+  const grams = left.map((k) => near.grams[k]!);
+  if (!materials.some((i) => prepared.strength[i]! > 0)) return phaseOne(prepared, { allowed });
+  const kept = left.length === near.materials.length && worstViolation(prepared, materials, grams) <= STILL_KEPT;
+  if (kept) return { feasible: true, materials, grams, rows: near.rows, iterations: 0 };
+  return phaseOne(prepared, { allowed, near: { materials, grams } });
 }
 
 function pointOf(set: ActiveSet): Point {

@@ -12,6 +12,17 @@ export interface Evidence {
   lambda: Float64Array;
 }
 
+export interface Found {
+  materials: readonly number[];
+  grams: readonly number[];
+  lambda: Float64Array;
+  steps: readonly Forcing[];
+  /** 1 for materials that neither a forcing rule nor the caller keeps out. */
+  allowed: Uint8Array;
+  /** 1 for the materials that the bound has to hold for; all where missing. */
+  among?: Uint8Array;
+}
+
 /**
  * Weak duality: E lies above its tangent at y, the rules may be added with weights >= 0, and the least value of the
  * linear function that results is taken at a single material. So
@@ -20,22 +31,8 @@ export interface Evidence {
  *
  * whatever y and lambda are. One pass over the data; nothing of the method's own state goes into it.
  */
-export function evidenceOf(
-  prepared: Prepared,
-  {
-    materials,
-    grams,
-    lambda,
-    steps,
-    allowed,
-  }: {
-    materials: readonly number[];
-    grams: readonly number[];
-    lambda: Float64Array;
-    steps: readonly Forcing[];
-    allowed: Uint8Array;
-  },
-): Evidence {
+export function evidenceOf(prepared: Prepared, found: Found): Evidence {
+  const { materials, grams, lambda, steps, allowed, among } = found;
   const { count, facets, vectors, strength, variance } = prepared;
   const residual = new Float64Array(facets);
   for (let f = 0; f < facets; f++) residual[f] = -prepared.target[f]!;
@@ -58,11 +55,11 @@ export function evidenceOf(
   }
   liftOdourless(prepared, lambda, allowed);
   let lift = liftOf(prepared, lambda);
-  const least = leastValue(prepared, { lambda, lift, slope, allowed });
+  const least = leastValue(prepared, { lambda, lift, slope }, allowed);
   raiseForcing(prepared, steps, lambda, (i) => strength[i]! * (slope[i]! - least));
   lift = liftOf(prepared, lambda);
   const objective = far + spread;
-  const proven = leastValue(prepared, { lambda, lift, slope });
+  const proven = leastValue(prepared, { lambda, lift, slope }, among);
   const bound = Math.min(objective, Math.max(0, objective - (along - proven)));
   return {
     objective,
@@ -80,13 +77,13 @@ interface Priced {
   slope: Float64Array;
 }
 
-function leastValue(prepared: Prepared, { lambda, lift, slope, allowed }: Priced & { allowed?: Uint8Array }): number {
+function leastValue(prepared: Prepared, { lambda, lift, slope }: Priced, among?: Uint8Array): number {
   const { count, strength, start, row, entry } = prepared;
   let sizeOfLift = 0;
   for (let r = 0; r < lambda.length; r++) sizeOfLift += Math.abs(lambda[r]! * prepared.base[r]!);
   let least = Number.POSITIVE_INFINITY;
   for (let i = 0; i < count; i++) {
-    if (allowed && allowed[i] === 0) continue;
+    if (among && among[i] === 0) continue;
     let sum = lift;
     let size = sizeOfLift;
     for (let at = start[i]!; at < start[i + 1]!; at++) {

@@ -13,8 +13,8 @@ export interface Forcing {
  * ceiling at the cheapest price), every material with a coefficient above 0 must stay out. Repeated until no rule does
  * so. Without this the blend would sit in a corner with no inside, where rounding decides.
  */
-export function forcedOut(prepared: Prepared): { allowed: Uint8Array; steps: Forcing[] } {
-  const allowed = new Uint8Array(prepared.count).fill(1);
+export function forcedOut(prepared: Prepared, among?: Uint8Array): { allowed: Uint8Array; steps: Forcing[] } {
+  const allowed = among ? among.slice() : new Uint8Array(prepared.count).fill(1);
   const steps: Forcing[] = [];
   for (;;) {
     const found = forcingRows(prepared, allowed);

@@ -6,6 +6,15 @@ export type Start =
   /** Weights of the rows, as `prepare` has them, that no blend can stand up to. */
   | { feasible: false; weights: Float64Array; iterations: number };
 
+export interface PhaseOneOptions {
+  /** 1 for the materials that may be used; all where missing. */
+  allowed?: Uint8Array;
+  /** 1 for the rules that are left aside; none where missing. */
+  left?: Uint8Array;
+  /** Where to begin: a blend that is thought to be near. */
+  near?: { materials: number[]; grams: number[] };
+}
+
 /** A blend this near to keeping every rule, relative to its limit, is taken to keep them. */
 const KEPT = 2e-10;
 const ROUNDING = 1e-13;
@@ -21,11 +30,8 @@ const DEPENDENCE = 1e-13;
  * (G'rho)_i >= n_i (1 - n'x) > 0. Being non-negative least squares it makes progress at every step, however many rows
  * meet in one corner. Slacks in use leave their rows out of the fit, so that only the rows that bind are ever factored.
  */
-export function phaseOne(
-  prepared: Prepared,
-  options: { allowed?: Uint8Array; without?: number; near?: { materials: number[]; grams: number[] } } = {},
-): Start {
-  const search = new FeasibleSearch(prepared, options.allowed, options.without ?? -1);
+export function phaseOne(prepared: Prepared, options: PhaseOneOptions = {}): Start {
+  const search = new FeasibleSearch(prepared, options);
   search.begin(options.near);
   const limit = 20 * (prepared.general + 20) + prepared.count;
   while (search.iterations < limit) {
@@ -50,8 +56,7 @@ class FeasibleSearch {
 
   constructor(
     private readonly prepared: Prepared,
-    private readonly allowed: Uint8Array | undefined,
-    private readonly without: number,
+    private readonly options: PhaseOneOptions,
   ) {
     this.fitted = new Uint8Array(prepared.rules.length);
     this.used = new Uint8Array(prepared.count);
@@ -66,7 +71,7 @@ class FeasibleSearch {
       if (first >= 0) this.addMaterial(first, 1);
     }
     for (const [r, rule] of this.prepared.rules.entries()) {
-      if (r === this.without) continue;
+      if (this.isLeft(r)) continue;
       if (rule.kind === 'exact' || this.valueOf(r, this.x) > 0) this.addRow(r);
     }
   }
@@ -151,8 +156,13 @@ class FeasibleSearch {
     return this.prepared.strength[i]! > 0 ? 1 : 0;
   }
 
+  private isLeft(r: number): boolean {
+    return this.options.left !== undefined && this.options.left[r] === 1;
+  }
+
   private isAllowed(i: number): boolean {
-    return this.used[i] === 0 && (!this.allowed || this.allowed[i] === 1);
+    const { allowed } = this.options;
+    return this.used[i] === 0 && (!allowed || allowed[i] === 1);
   }
 
   /** The material that smells and breaks least by itself: a short way to go. */
@@ -166,7 +176,7 @@ class FeasibleSearch {
       for (let at = prepared.start[i]!; at < prepared.start[i + 1]!; at++) {
         const r = prepared.row[at]!;
         const base = prepared.base[r]!;
-        if (r !== this.without) broken += over(prepared.entry[at]! + base) - over(base);
+        if (!this.isLeft(r)) broken += over(prepared.entry[at]! + base) - over(base);
       }
       if (broken < least) [best, least] = [i, broken];
     }
@@ -221,7 +231,7 @@ class FeasibleSearch {
       if (part < block.part || block.material < 0) [block.part, block.material] = [Math.min(part, block.part), k];
     }
     for (const [r, rule] of this.prepared.rules.entries()) {
-      if (this.fitted[r] === 1 || rule.kind === 'exact' || r === this.without) continue;
+      if (this.fitted[r] === 1 || rule.kind === 'exact' || this.isLeft(r)) continue;
       const then = this.valueOf(r, wanted);
       if (!(then > 0)) continue;
       const now = Math.min(0, this.valueOf(r, this.x));

@@ -129,6 +129,23 @@ function rowsByMaterial(problem: BlendProblem, materials: readonly EngineMateria
   return { rules, general, base, start, row, entry, strengthScale };
 }
 
+/** Gives a price rule another ceiling above 0, in place: the rows of a frontier differ in nothing else. */
+export function renewLimit(prepared: Prepared, name: 'budgetPerKg' | 'costPerImpact', limit: number): void {
+  const { rules, base, start, row, entry, cost, strength, strengthScale } = prepared;
+  const r = rules.findIndex(({ rule }) => rule === name);
+  const rule = rules[r]!;
+  rule.limit = limit;
+  rule.scale = rule.per === 'impact' ? limit * strengthScale : limit;
+  for (let i = 0; i < prepared.count; i++) {
+    for (let at = start[i]!; at < start[i + 1]!; at++) {
+      if (row[at] !== r) continue;
+      const value = cost[i]! / rule.scale;
+      if (rule.per === 'impact') entry[at] = impactPrice(value, strength[i]! / strengthScale);
+      else entry[at] = Math.abs(value + base[r]!) <= SAME ? -base[r]! : value;
+    }
+  }
+}
+
 function baseOf(rule: Rule): number {
   if (rule.limit === 0 || rule.per === 'impact') return 0;
   return rule.kind === 'min' ? 1 : -1;
@@ -151,7 +168,7 @@ function eachEntry(
       const value = perImpact
         ? impactPrice(rule.amounts[i]! * factor, materials[i]!.strength / unit)
         : rule.amounts[i]! * factor;
-      if (value !== 0) visit(i, r, value);
+      if (value !== 0 || perImpact) visit(i, r, value);
     }
   }
 }

@@ -61,6 +61,14 @@ export class Pricing {
     return again >= 0 ? again : this.bestOfAll(set);
   }
 
+  /** The first by number that would help at all. */
+  first(set: ActiveSet): number {
+    for (let i = 0; i < this.prepared.count; i++) {
+      if (this.used[i] === 0 && this.goal.allowed?.[i] !== 0 && this.score(i, set) < 0) return i;
+    }
+    return -1;
+  }
+
   private bestListed(set: ActiveSet): number {
     let best = -1;
     let most = 0;

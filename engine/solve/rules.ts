@@ -12,6 +12,8 @@ export interface Rule {
   /** What the limit is measured against: the mass of the blend, or its impact (the price at equal strength). */
   per: 'mass' | 'impact';
   limit: number;
+  /** Whether the limit is a share of the mass, and so at most 1. */
+  isFraction: boolean;
   /** The row is the contract's row divided by this: the limit, or 1 where the limit is 0. */
   scale: number;
   /** Amount per gram of each material that has any: a dense list, or the materials named. */
@@ -43,7 +45,8 @@ export function rulesOf(
   ) => {
     if (kind === 'min' && limit === 0) return;
     const scale = limit > 0 ? limit : 1;
-    rules.push({ rule, side: kind === 'min' ? 'min' : 'max', kind, per, limit, scale, amounts });
+    const isFraction = /^(minNatural$|group:|kept:|required:|share:)/.test(rule);
+    rules.push({ rule, side: kind === 'min' ? 'min' : 'max', kind, per, limit, isFraction, scale, amounts });
   };
   const { budgetPerKg, costPerImpact, minStrength = 0, minNatural = 0, limits = [], groups = [], kept = [] } = problem;
   if (budgetPerKg !== undefined)
@@ -109,4 +112,26 @@ function constituentSum(
     for (const { id, max } of constituents) sum += (factors.get(id) ?? 0) * max;
     return sum;
   });
+}
+
+/** The problem with one rule's limit at another value. */
+export function withLimit(problem: BlendProblem, { rule, kind }: Rule, to: number): BlendProblem {
+  const id = rule.slice(rule.indexOf(':') + 1);
+  const swap = <T extends { id: string }>(list: readonly T[] | undefined, change: Partial<T>): T[] =>
+    (list ?? []).map((one) => (one.id === id ? { ...one, ...change } : one));
+  if (rule.startsWith('limit:')) return { ...problem, limits: swap(problem.limits, { max: to }) };
+  if (rule.startsWith('group:')) return { ...problem, groups: swap(problem.groups, { [kind]: to }) };
+  if (rule.startsWith('kept:')) return { ...problem, kept: swap(problem.kept, { share: to }) };
+  if (rule.startsWith('share:')) {
+    return { ...problem, candidates: swap(problem.candidates, kind === 'min' ? { minShare: to } : { maxShare: to }) };
+  }
+  return { ...problem, [rule]: to };
+}
+
+/** A rule's amounts as one list; `count` may be 0 where only the values matter and not whose they are. */
+export function amountsOf({ amounts }: Rule, count: number): Float64Array {
+  if (amounts instanceof Float64Array) return amounts;
+  const list = new Float64Array(Math.max(count, 1 + Math.max(-1, ...amounts.at)));
+  for (const i of amounts.at) list[i] = amounts.amount;
+  return list;
 }

@@ -1,7 +1,7 @@
 import type { BlendProblem, BlendSolution, Run } from '../contract';
 import { checkProblem } from '../input/problem';
-import { answerOf, answerWithout, farkasOf } from './answer';
 import { closest } from './closest';
+import { describe } from './describe';
 import { prepare } from './prepare';
 
 /**
@@ -15,11 +15,5 @@ import { prepare } from './prepare';
 export function solveBlend(problem: BlendProblem, _run?: Run): BlendSolution {
   checkProblem(problem);
   const prepared = prepare(problem);
-  const found = closest(prepared);
-  const counts = { nodes: 1, iterations: found.iterations };
-  if (found.kind === 'blend') return answerOf(prepared, found.point, found.evidence, counts);
-  return answerWithout(
-    { status: 'infeasible', bound: null as unknown as number, farkas: farkasOf(prepared, found.weights) },
-    counts,
-  );
+  return describe(prepared, closest(prepared));
 }

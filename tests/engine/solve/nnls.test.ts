@@ -41,7 +41,7 @@ describe('nnls', () => {
         expect(fit.status).toBe('optimal');
         expectOptimal(a, b, fit.x);
       }),
-      { seed: 1974, numRuns: 1500 },
+      { seed: 1974, numRuns: 800 },
     );
   });
 
