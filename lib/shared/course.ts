@@ -20,7 +20,7 @@ export function courseOfMaterial(material: Smelling): { hours: number; profile: 
       profile: material.profile,
       strength: material.strength || 1,
       costPerKg: 0,
-      evaporation: (material.evaporationPerHour ?? 0) / PAPER,
+      evaporation: material.evaporationPerHour ?? 0,
     },
     share: 1,
   };

@@ -53,7 +53,7 @@ export function MaterialLine({ row, index, facets, currency, style }: MaterialLi
           <span className="sr-only lg:hidden"> {smell}</span>
         </p>
       </th>
-      <td className="truncate text-ink-soft max-lg:hidden">{smell}</td>
+      <td className="truncate text-ink-soft max-lg:hidden">{smell.replace(/^mostly /, '')}</td>
       <td className="figures text-right max-xl:hidden">{percentWords(row.naturalShare)}</td>
       <td className="figures text-right max-md:hidden" title={row.strengthClass}>
         {estimateWords(row.strength)}

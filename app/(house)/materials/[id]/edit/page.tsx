@@ -15,5 +15,5 @@ export default async function EditMaterialPage({ params }: { params: Promise<{ i
     if (error instanceof NotFound) notFound();
     throw error;
   });
-  return <MaterialForm key={material.revision} material={material} facets={await listFacets(ctx)} />;
+  return <MaterialForm material={material} facets={await listFacets(ctx)} />;
 }
