@@ -7,7 +7,7 @@ import { lastLines } from './command.mjs';
 import { inRoot, ROOT } from './root.mjs';
 import { CannotGoOn } from './sentence.mjs';
 
-const READY_WITHIN_MS = 60_000;
+const READY_WITHIN_MS = 120_000;
 const STOPPED_WITHIN_MS = 10_000;
 
 /**
