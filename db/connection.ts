@@ -1,5 +1,6 @@
 import { drizzle } from 'drizzle-orm/mysql2';
 import mysql, { type Pool, type PoolOptions } from 'mysql2/promise';
+import { hideValuesOfFailedQueries } from './told-error';
 
 const POOL_SIZE = 12;
 
@@ -51,6 +52,8 @@ function openPool(): Pool {
 /** Kept across the reloads of development, or each one would leave a pool behind. */
 const kept = globalThis as typeof globalThis & { stillroomPool?: Pool };
 kept.stillroomPool ??= openPool();
+
+hideValuesOfFailedQueries();
 
 export const pool = kept.stillroomPool;
 export const db = drizzle(pool, { casing: 'snake_case' });

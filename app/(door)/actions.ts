@@ -62,8 +62,12 @@ function again(typed: Record<string, FormDataEntryValue>, errors: Record<string,
   return { errors, values: rest as Record<string, string> };
 }
 
+/** Whoever comes in anew ends the session that this browser had before. */
 async function keep(token: string): Promise<void> {
-  (await cookies()).set(SESSION_COOKIE, token, { httpOnly: true, secure: true, sameSite: 'lax', path: '/' });
+  const jar = await cookies();
+  const before = jar.get(SESSION_COOKIE)?.value;
+  if (before) await endSession(before);
+  jar.set(SESSION_COOKIE, token, { httpOnly: true, secure: true, sameSite: 'lax', path: '/' });
 }
 
 /** Next lets a request without an Origin through to its actions; we don't. */

@@ -12,6 +12,11 @@ import { problemResponse, refusal } from './problem';
 /** The largest JSON body taken, in bytes. */
 const MAX_BODY_BYTES = 1_000_000;
 
+/** Next answers HEAD with the handler of GET. */
+const READS = new Set(['GET', 'HEAD']);
+/** More faults than this help nobody, and one body could hold a hundred thousand. */
+const MAX_FAULTS = 50;
+
 /** What a route is, as data: the access test and the documents read it. */
 export interface Operation {
   id: string;
@@ -48,7 +53,7 @@ export function teamRoute<const O extends Operation>(
 ): RouteHandler {
   const route = async (request: Request, { params }: RouteContext): Promise<Response> => {
     try {
-      if (request.method !== 'GET' && !isSameOrigin(request.headers))
+      if (!READS.has(request.method) && !isSameOrigin(request.headers))
         return refusal(403, 'Not from here', 'A change must come from Stillroom’s own pages.');
       const ctx = await memberOfRequest();
       if (!ctx) return refusal(401, 'Not signed in', 'Sign in to go on.');
@@ -63,7 +68,8 @@ export function teamRoute<const O extends Operation>(
       const status = operation.status ?? 200;
       if (!operation.once) return answer(status, await work());
       const key = request.headers.get('idempotency-key');
-      const settled = await answerOnce({ ctx, operation: operation.id, key, text, status }, work);
+      const asked = `${new URL(request.url).pathname} ${text}`;
+      const settled = await answerOnce({ ctx, operation: operation.id, key, request: asked, status }, work);
       return answer(settled.status, settled.answer);
     } catch (error) {
       return problemResponse(error);
@@ -83,10 +89,28 @@ function answer(status: number, body: unknown): Response {
 
 async function bodyText(request: Request): Promise<string> {
   const type = request.headers.get('content-type') ?? '';
-  if (!type.startsWith('application/json')) throw new Invalid({ body: 'The body must be JSON (application/json).' });
-  const bytes = await request.arrayBuffer();
-  if (bytes.byteLength > MAX_BODY_BYTES) throw new Invalid({ body: 'The body is larger than 1 MB.' });
-  return new TextDecoder().decode(bytes);
+  if (!/^application\/json\s*(;|$)/i.test(type))
+    throw new Invalid({ body: 'The body must be JSON (application/json).' });
+  const bytes = await bodyBytes(request);
+  try {
+    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+  } catch {
+    throw new Invalid({ body: 'The body is not text in UTF-8.' });
+  }
+}
+
+/** Stops reading at the limit, so that nobody fills the memory by sending on. */
+async function bodyBytes(request: Request): Promise<Uint8Array> {
+  const tooLarge = new Invalid({ body: 'The body is larger than 1 MB.' });
+  if (Number(request.headers.get('content-length') ?? 0) > MAX_BODY_BYTES) throw tooLarge;
+  const parts: Uint8Array[] = [];
+  let size = 0;
+  for await (const part of request.body ?? []) {
+    size += part.byteLength;
+    if (size > MAX_BODY_BYTES) throw tooLarge;
+    parts.push(part);
+  }
+  return Buffer.concat(parts);
 }
 
 function json(text: string): unknown {
@@ -102,8 +126,8 @@ function parse(schema: z.ZodType | undefined, value: unknown): unknown {
   if (!schema) return undefined;
   const result = schema.safeParse(value);
   if (result.success) return result.data;
-  const fields: Record<string, string> = {};
-  for (const issue of result.error.issues) {
+  const fields: Record<string, string> = Object.create(null); // a field may be called “constructor”
+  for (const issue of result.error.issues.slice(0, MAX_FAULTS)) {
     const path = issue.path.map(String).join('.') || 'body';
     fields[path] ??= issue.message;
   }

@@ -11,10 +11,8 @@ export function isSameOrigin(headers: Headers): boolean {
   if (site !== null) return site === 'same-origin';
   const origin = headers.get('origin');
   if (origin === null) return false;
-  return URL.canParse(origin) && new URL(origin).host === ownHost(headers);
-}
-
-function ownHost(headers: Headers): string | null {
+  if (!URL.canParse(origin)) return false;
   const configured = process.env.APP_ORIGIN;
-  return configured && URL.canParse(configured) ? new URL(configured).host : headers.get('host');
+  if (configured && URL.canParse(configured)) return new URL(origin).origin === new URL(configured).origin;
+  return new URL(origin).host === headers.get('host');
 }

@@ -1,6 +1,7 @@
 import 'server-only';
 import { availableParallelism } from 'node:os';
 import { hash, verify } from '@node-rs/argon2';
+import { TooMany } from '@/lib/errors';
 import { isCommonPassword } from './common-passwords';
 
 export const MIN_PASSWORD = 15;
@@ -43,17 +44,24 @@ export const hashPassword = (password: string): Promise<string> => queued(() => 
 
 /** Whether the password belongs to the hash; with no hash it takes as long and answers false. */
 export async function verifyPassword(encoded: string | null, password: string): Promise<boolean> {
-  decoy ??= hashPassword('not anyone’s password');
+  decoy ??= hash('not anyone’s password', COST);
   const against = encoded ?? (await decoy);
   return (await queued(() => verify(against, password))) && encoded !== null;
 }
 
-/** At most two hashes a core at once: each holds 19 MiB, the rest wait their turn. */
+/**
+ * At most two hashes a core at once: each holds 19 MiB, the rest wait their turn, and of those only as many as are
+ * served in some seconds. Whoever sends more keeps no one else from signing in for longer than that.
+ */
 const places = 2 * availableParallelism();
+const MAX_WAITING = 40 * places;
+const RETRY_S = 10;
 let running = 0;
 const waiting: (() => void)[] = [];
 
 async function queued<T>(work: () => Promise<T>): Promise<T> {
+  if (waiting.length >= MAX_WAITING)
+    throw new TooMany('Very many people are at the door. Try again in a moment.', RETRY_S);
   if (running >= places) await new Promise<void>((resolve) => waiting.push(resolve));
   else running++;
   try {

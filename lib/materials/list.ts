@@ -48,6 +48,9 @@ export async function listMaterials(ctx: Member, query: MaterialListQuery): Prom
   };
 }
 
+/** Each word is looked for in every name of every material. */
+const MAX_WORDS = 10;
+
 const asksForCost = ({ sort, minPrice, maxPrice, maxEqual }: MaterialListQuery) =>
   sort === 'price' || sort === 'equal' || Boolean(minPrice ?? maxPrice ?? maxEqual);
 
@@ -95,6 +98,7 @@ function conditions(ctx: Member, query: MaterialListQuery, costPerKg: SQL.Aliase
     ...(q ?? '')
       .split(/\s+/)
       .filter(Boolean)
+      .slice(0, MAX_WORDS)
       .map((word) => matches(ctx, word)),
     kind?.length ? inArray(materials.kind, kind) : undefined,
     ...(floors ?? []).map((floor) => smellsOf(ctx, floor)),

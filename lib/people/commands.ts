@@ -13,16 +13,28 @@ import { loadLibrary } from '@/lib/library/load-library';
 import type { SignUpInput } from '@/lib/shared/people-input';
 import { ROLES, type Role } from '@/lib/shared/permissions';
 
-const SIGN_IN_TRIES = 100;
+/** In an hour of the clock, so that no sixty minutes in a row hold more than a hundred. */
+const SIGN_IN_TRIES = 50;
+/**
+ * Opening a house costs a password's hash and hundreds of rows, and tells whether an address is taken: without mail
+ * there is no other way to say why nothing was opened. So it is counted, for each address and for the whole server;
+ * the addresses of senders can't be trusted behind an unknown proxy.
+ */
+const SIGN_UP_TRIES = 10;
+const SIGN_UPS_OF_ALL = 300;
+/** Anyone may look around the demo house, and each look is a row. */
+const DEMO_SIGN_INS = 3000;
 
 /**
  * Makes a house and its owner, with the facets, limits and, if wanted, the materials of the sample library.
  *
- * @returns the token of the new session. @throws Invalid by field.
+ * @returns the token of the new session. @throws Invalid by field, TooMany.
  */
 export async function signUp(input: SignUpInput): Promise<string> {
   const fault = passwordFault(input.password, [input.houseName, input.email.split('@')[0] ?? '']);
   if (fault) throw new Invalid({ password: fault });
+  await countAttempt('sign-up', input.email, SIGN_UP_TRIES);
+  await countAttempt('sign-up', 'all', SIGN_UPS_OF_ALL);
   const passwordHash = await hashPassword(input.password);
   const teamId = newId();
   const userId = newId();
@@ -56,6 +68,7 @@ export async function signIn(input: { email: string; password: string }): Promis
 /** Signs in as the demo house's person of this role, while the demo house is loaded. @throws NotFound when it isn't. */
 export async function signInAsDemo(role: Role): Promise<string> {
   if (!ROLES.includes(role)) throw new NotFound();
+  await countAttempt('demo', 'all', DEMO_SIGN_INS);
   const [member] = await db
     .select({ teamId: teams.id, userId: membershipRoles.userId })
     .from(teams)

@@ -29,11 +29,14 @@ export interface FacetFloor {
 }
 
 /** "rosy:4,honeyed": a facet alone means any trace of it. */
-const facetFloors = z.string().transform((text, context): FacetFloor[] => {
-  const floors = text.split(',').filter(Boolean).map(facetFloor);
-  for (const floor of floors) if (typeof floor === 'string') context.addIssue({ code: 'custom', message: floor });
-  return floors.filter((floor) => typeof floor !== 'string');
-});
+const facetFloors = z
+  .string()
+  .max(400, 'Name at most some ten facets.')
+  .transform((text, context): FacetFloor[] => {
+    const floors = text.split(',').filter(Boolean).map(facetFloor);
+    for (const floor of floors) if (typeof floor === 'string') context.addIssue({ code: 'custom', message: floor });
+    return floors.filter((floor) => typeof floor !== 'string');
+  });
 
 function facetFloor(part: string): FacetFloor | string {
   const [slug = '', least = '0.01', ...more] = part.split(':');
