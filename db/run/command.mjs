@@ -25,5 +25,27 @@ export function run(program, args, { input, ...options } = {}) {
   });
 }
 
+/** Runs a program to its end while its words go to the terminal as they come. @returns its exit code, or its signal. */
+export function show(program, args, options = {}) {
+  const child = begin(program, args, { ...options, stdio: ['ignore', 'inherit', 'inherit'] });
+  return new Promise((resolve) => {
+    child.once('error', () => resolve(127));
+    child.once('exit', (code, signal) => resolve(code ?? signal));
+  });
+}
+
+const underWay = new Set();
+process.on('exit', () => {
+  for (const child of underWay) child.kill();
+});
+
+/** What is still under way when we end, ends with us. */
+function begin(program, args, options) {
+  const child = spawn(program, args, options);
+  underWay.add(child);
+  child.once('exit', () => underWay.delete(child));
+  return child;
+}
+
 /** The last lines of a long text: where the reason usually stands. */
 export const lastLines = (text, count = 12) => text.trimEnd().split('\n').slice(-count).join('\n');

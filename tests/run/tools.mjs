@@ -1,6 +1,5 @@
-import { spawn } from 'node:child_process';
 import { existsSync, readFileSync } from 'node:fs';
-import { run } from '../../db/run/command.mjs';
+import { run, show } from '../../db/run/command.mjs';
 import { inData, inRoot, ROOT } from '../../db/run/root.mjs';
 
 const TOOL_LIMIT_MS = 5 * 60_000;
@@ -33,7 +32,7 @@ export async function runVitest(project, paths, variables = {}) {
       `--outputFile.json=${report}`,
       ...paths,
     ],
-    variables,
+    { cwd: ROOT, env: { ...process.env, ...variables }, timeout: TESTS_LIMIT_MS },
   );
   if (!existsSync(report)) return outcome(0, 1, `Vitest ended with ${code} and without a report.`);
   return count(JSON.parse(readFileSync(report, 'utf8')), code);
@@ -53,14 +52,3 @@ function count(report, code) {
 }
 
 const isFailed = (test) => test.status === 'failed';
-
-function show(program, args, variables) {
-  const env = { ...process.env, ...variables };
-  const child = spawn(program, args, {
-    cwd: ROOT,
-    env,
-    stdio: ['ignore', 'inherit', 'inherit'],
-    timeout: TESTS_LIMIT_MS,
-  });
-  return new Promise((resolve) => child.once('exit', (code, signal) => resolve(code ?? signal)));
-}
