@@ -1,27 +1,31 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { type KeyboardEvent, useEffect, useState } from 'react';
+import { type KeyboardEvent, useEffect, useMemo, useState } from 'react';
 import { Dialog } from 'react-aria-components/Dialog';
 import { Modal, ModalOverlay } from 'react-aria-components/Modal';
-import { fuzzyFilter } from '@/lib/shared/fuzzy';
 import { classNames } from '../ui/class-names';
+import { type FoundGroup, type Hit, rankHits } from './rank';
 import { type PaletteItem, paletteSources } from './sources';
 
-type Hit = PaletteItem & { group: string };
-const MOST_PER_SOURCE = 12;
-
-async function findHits(query: string, signal: AbortSignal): Promise<Hit[]> {
-  const found = await Promise.all(
-    paletteSources().map(async (source) => {
-      // One source that fails must not silence the others.
-      const items = await Promise.resolve(source.find(query, signal)).catch(() => []);
-      return fuzzyFilter(query, items, (item) => `${item.label} ${item.detail ?? ''}`)
-        .slice(0, MOST_PER_SOURCE)
-        .map((item) => ({ ...item, group: source.label }));
-    }),
-  );
-  return found.flat();
+/**
+ * The hits of every source, shown as they come: a slow one holds nobody up, one that fails leaves the others standing,
+ * and what was found for the letters before stays until there is something newer.
+ */
+function useHits(query: string): { hits: Hit[]; isWaiting: boolean } {
+  const [found, setFound] = useState<ReadonlyMap<string, FoundGroup & { query: string }>>(new Map());
+  useEffect(() => {
+    const asking = new AbortController();
+    for (const { id, label, searched = false, find } of paletteSources()) {
+      const keep = (items: readonly PaletteItem[]) =>
+        asking.signal.aborted || setFound((before) => new Map(before).set(id, { id, label, items, searched, query }));
+      Promise.resolve(find(query, asking.signal)).then(keep, () => keep([]));
+    }
+    return () => asking.abort();
+  }, [query]);
+  const groups = [...found.values()];
+  const hits = useMemo(() => rankHits(query, [...found.values()]), [query, found]);
+  return { hits, isWaiting: groups.length < paletteSources().length || groups.some((group) => group.query !== query) };
 }
 
 export function PalettePanel({ open, onOpenChange }: { open: boolean; onOpenChange: (open: boolean) => void }) {
@@ -30,7 +34,7 @@ export function PalettePanel({ open, onOpenChange }: { open: boolean; onOpenChan
       isOpen={open}
       onOpenChange={onOpenChange}
       isDismissable
-      className="fixed inset-0 z-50 grid justify-items-center bg-veil px-3 pt-[12dvh] data-[entering]:animate-appear"
+      className="fixed inset-0 z-50 grid grid-cols-[minmax(0,1fr)] justify-items-center bg-veil px-3 pt-[12dvh] data-[entering]:animate-appear"
     >
       <Modal className="h-fit w-full max-w-xl rounded-tile border border-ink bg-paper text-ink shadow-lift">
         <Dialog aria-label="Find" className="outline-none">
@@ -44,17 +48,8 @@ export function PalettePanel({ open, onOpenChange }: { open: boolean; onOpenChan
 function Search({ onDone }: { onDone: () => void }) {
   const router = useRouter();
   const [query, setQuery] = useState('');
-  const [hits, setHits] = useState<Hit[]>([]);
+  const { hits, isWaiting } = useHits(query);
   const [active, setActive] = useState(0);
-  useEffect(() => {
-    const asking = new AbortController();
-    findHits(query, asking.signal).then((found) => {
-      if (asking.signal.aborted) return;
-      setHits(found);
-      setActive(0);
-    });
-    return () => asking.abort();
-  }, [query]);
 
   function follow(hit: Hit | undefined) {
     if (!hit) return;
@@ -76,14 +71,17 @@ function Search({ onDone }: { onDone: () => void }) {
         autoFocus
         role="combobox"
         aria-label="Find a material, a screen or an action"
-        aria-expanded="true"
+        aria-expanded={hits.length > 0}
         aria-controls="palette-hits"
         aria-activedescendant={hits[active] ? `palette-hit-${active}` : undefined}
         autoComplete="off"
         spellCheck={false}
         placeholder="A material, a screen, an action"
         value={query}
-        onChange={(event) => setQuery(event.target.value)}
+        onChange={(event) => {
+          setQuery(event.target.value);
+          setActive(0);
+        }}
         onKeyDown={onKeyDown}
         className="w-full border-b border-grout bg-transparent px-5 py-4 text-lead outline-none"
       />
@@ -92,6 +90,7 @@ function Search({ onDone }: { onDone: () => void }) {
         role="listbox"
         aria-label="Found"
         tabIndex={-1}
+        hidden={hits.length === 0}
         className="max-h-[50dvh] overflow-auto py-2"
       >
         {hits.map((hit, index) => (
@@ -104,8 +103,12 @@ function Search({ onDone }: { onDone: () => void }) {
             onFollow={follow}
           />
         ))}
-        {hits.length === 0 ? <p className="px-5 py-3 text-ink-soft">Nothing by that name.</p> : null}
       </div>
+      {hits.length === 0 ? (
+        <p role="status" className="px-5 pt-1 pb-4 text-ink-soft">
+          {isWaiting ? 'Looking' : 'Nothing by that name.'}
+        </p>
+      ) : null}
     </>
   );
 }

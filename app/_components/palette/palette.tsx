@@ -4,6 +4,7 @@ import dynamic from 'next/dynamic';
 import { useEffect, useMemo, useState } from 'react';
 import { ENTRIES } from '../shell/entries';
 import { classNames } from '../ui/class-names';
+import { useHouseSources } from './house-sources';
 import { type PaletteSource, usePaletteSource } from './sources';
 
 // The list and its dialog are fetched when somebody first asks.
@@ -13,10 +14,11 @@ const OPEN = 'stillroom:palette';
 export const openPalette = () => window.dispatchEvent(new Event(OPEN));
 
 /** Listens for Ctrl-K and Cmd-K, and knows the screens; anything else is a source that a screen adds. */
-export function Palette({ allowed }: { allowed: readonly string[] }) {
+export function Palette({ allowed, actions }: { allowed: readonly string[]; actions: readonly string[] }) {
   const [open, setOpen] = useState(false);
   const [wanted, setWanted] = useState(false);
   usePaletteSource(useMemo(() => screens(allowed), [allowed]));
+  useHouseSources(actions);
   useEffect(() => {
     const show = () => {
       setWanted(true);

@@ -15,6 +15,8 @@ export interface PaletteSource {
   id: string;
   /** The heading above its hits. */
   label: string;
+  /** `find` has searched already: its hits are not filtered again. */
+  searched?: boolean;
   find: (query: string, signal: AbortSignal) => readonly PaletteItem[] | Promise<readonly PaletteItem[]>;
 }
 

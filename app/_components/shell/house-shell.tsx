@@ -9,11 +9,13 @@ export interface HouseShellProps {
   person: Person;
   /** The hrefs of the rail that the member's roles allow. */
   allowed: readonly string[];
+  /** The hrefs of the palette's actions that they allow. */
+  actions: readonly string[];
   children: ReactNode;
 }
 
 /** Rail on the left, the bench on the right; on a phone the rail lies below the thumb. */
-export function HouseShell({ person, allowed, children }: HouseShellProps) {
+export function HouseShell({ person, allowed, actions, children }: HouseShellProps) {
   const home = allowed[0] ?? '/';
   return (
     <div className="md:grid md:min-h-dvh md:grid-cols-[13.5rem_minmax(0,1fr)] print:block">
@@ -47,7 +49,7 @@ export function HouseShell({ person, allowed, children }: HouseShellProps) {
         <BarLinks allowed={allowed} />
         <PersonMenu person={person} placement="bar" />
       </nav>
-      <Palette allowed={allowed} />
+      <Palette allowed={allowed} actions={actions} />
     </div>
   );
 }

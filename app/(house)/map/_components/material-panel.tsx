@@ -55,7 +55,7 @@ export function MaterialPanel({ material, map, view, mayBlend, onSelect }: Mater
           Open the material
         </ButtonLink>
         {mayBlend ? (
-          <ButtonLink size="small" href={`/blend?target=material:${material.id}`}>
+          <ButtonLink size="small" href={`/blend?target=${material.id}`}>
             Use as target
           </ButtonLink>
         ) : null}
