@@ -148,7 +148,7 @@ function FacetRow({ facet, when, entry, base, onWrite, onForget }: FacetRowProps
   const intensity = shown?.intensity ?? 0;
   const differs = when !== 'all' && entry;
   return (
-    <div className="grid grid-cols-[minmax(0,1fr)_5rem_5rem] items-start gap-x-3 border-t border-grout pt-2">
+    <div className="grid grid-cols-[minmax(0,1fr)_6.25rem_6.25rem] items-start gap-x-3 border-t border-grout pt-2">
       <Slider
         label={
           <span className="inline-flex items-center gap-2" title={facet.description}>
@@ -158,7 +158,7 @@ function FacetRow({ facet, when, entry, base, onWrite, onForget }: FacetRowProps
         }
         min={0}
         max={10}
-        step={0.25}
+        step={0.05}
         graduations={10}
         value={intensity}
         onChange={(value) => onWrite({ intensity: value })}
@@ -166,7 +166,7 @@ function FacetRow({ facet, when, entry, base, onWrite, onForget }: FacetRowProps
       <NumberField
         label={`${facet.name}, intensity`}
         hideLabel
-        unit=""
+        unit="/10"
         min={0}
         max={10}
         digits={2}
