@@ -37,7 +37,7 @@ export async function listBlends(ctx: Member, after?: string): Promise<SavedBlen
       targetName: blends.targetName,
       distance: blends.distance,
       costPerKg: blends.costPerKg,
-      profile: sql<string>`json_extract(${blends.solution}, '$.profile')`,
+      profile: sql<unknown>`json_extract(${blends.solution}, '$.profile')`,
       createdAt: blends.createdAt,
       createdBy: users.name,
     })
@@ -57,7 +57,7 @@ export async function listBlends(ctx: Member, after?: string): Promise<SavedBlen
       ...row,
       costPerKg: seesPrices ? new Decimal(costPerKg).toFixed(4) : null,
       currency: ctx.currency,
-      profile: z.array(z.number()).parse(JSON.parse(profile)),
+      profile: z.array(z.number()).parse(profile),
       materials: names.get(row.id) ?? [],
       createdAt: createdAt.toISOString(),
     })),

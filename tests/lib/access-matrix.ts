@@ -1,6 +1,7 @@
 import { ROLES, type Role } from '@/lib/shared/permissions';
 import type { Method } from '../support/api-routes';
 import type { CanaryHouse } from '../support/canary-house';
+import { BLEND_ACCESS } from './access-blends';
 import { MATERIAL_ACCESS } from './access-materials';
 
 /** What a member sends. Made anew for every call, so that one call can't spoil the next. */
@@ -32,6 +33,7 @@ export const ACCESS: readonly Access[] = [
     ids: ['query.focus'],
   },
   ...MATERIAL_ACCESS,
+  ...BLEND_ACCESS,
 ];
 
 /** Routes outside the API of a house, and why they may stand open. */

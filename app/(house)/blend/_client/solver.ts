@@ -1,0 +1,47 @@
+import type { BlendRequest } from '@/lib/shared/blend-input';
+import type { BlendInputs } from '@/lib/shared/blend-problem';
+import type { FromWorker, ToWorker } from './messages';
+
+type Task = 'solve' | 'frontier';
+
+/**
+ * One worker that is asked one thing at a time, and always the latest: while it works, newer questions replace each
+ * other, so a drag never queues up. Ending it is how a long task is cancelled.
+ */
+export class Solver {
+  private readonly worker: Worker;
+  private turn = 0;
+  private isBusy = false;
+  private waiting: { task: Task; request: BlendRequest } | null = null;
+
+  constructor(inputs: BlendInputs, tell: (answer: FromWorker) => void, fail: () => void) {
+    this.worker = new Worker(new URL('./blend.worker.ts', import.meta.url), { type: 'module' });
+    this.worker.onmessage = ({ data }: MessageEvent<FromWorker>) => {
+      this.isBusy = false;
+      // An answer that a newer question has overtaken is still the freshest picture there is.
+      tell(data);
+      const next = this.waiting;
+      this.waiting = null;
+      if (next) this.ask(next.task, next.request);
+    };
+    this.worker.onerror = fail;
+    this.send({ kind: 'load', inputs });
+  }
+
+  ask(task: Task, request: BlendRequest): void {
+    if (this.isBusy) {
+      this.waiting = { task, request };
+      return;
+    }
+    this.isBusy = true;
+    this.send({ kind: task, turn: ++this.turn, request });
+  }
+
+  end(): void {
+    this.worker.terminate();
+  }
+
+  private send(message: ToWorker): void {
+    this.worker.postMessage(message);
+  }
+}
