@@ -11,6 +11,7 @@ export { estimateStrength, STRENGTH_CLASSES, twoDigits } from './odour/strength'
 export { agreement } from './panel/agreement';
 export { trianglePower, triangleSimilarity } from './panel/triangle-power';
 export { triangleTest } from './panel/triangle-test';
+export { alternativeBlends } from './solve/alternatives';
 export { traceFrontier } from './solve/frontier';
 export { nnls } from './solve/nnls';
 export { solveBlend } from './solve/solve-blend';

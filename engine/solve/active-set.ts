@@ -10,7 +10,7 @@ export interface Goal {
   linear?: Float64Array;
   /** Materials that may be used; all where missing. */
   allowed?: Uint8Array;
-  /** 1 for the rules that are left aside; none where missing. */
+  /** 1 for the rules that are left aside; those asleep where missing. */
   left?: Uint8Array;
 }
 
@@ -314,12 +314,13 @@ export class ActiveSet {
 
   /** Every row outside the working set that the materials in use touch: its value, and its change along the step. */
   private eachRow(visit: (row: number, value: number, change: number) => void): void {
-    const { prepared, value, change, inRows, goal } = this;
+    const { prepared, value, change, inRows } = this;
+    const left = this.goal.left ?? prepared.asleep;
     for (let r = 0; r < prepared.general; r++) {
-      if (inRows[r] === 0 && !goal.left?.[r]) visit(r, value[r]!, change[r]!);
+      if (inRows[r] === 0 && left[r] === 0) visit(r, value[r]!, change[r]!);
     }
     for (const { row, now, delta } of this.own) {
-      if (inRows[row] === 0 && !goal.left?.[row]) visit(row, now, delta);
+      if (inRows[row] === 0 && left[row] === 0) visit(row, now, delta);
     }
   }
 

@@ -83,6 +83,7 @@ function pricesOf(
   const prices: RulePrice[] = [];
   for (let r = 0; r < rules.length; r++) {
     const rule = rules[r]!;
+    if (rule.doseOf !== undefined) continue;
     if (r >= general && lambda[r] === 0 && !used.has(onlyMaterial(rule))) continue;
     const multiplier = lambda[r]! / rule.scale;
     const slack = rule.kind === 'min' ? values[r]! - rule.limit : rule.limit - values[r]!;

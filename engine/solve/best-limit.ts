@@ -18,7 +18,7 @@ export interface BestLimit {
  */
 export function bestLimit(prepared: Prepared, r: number, wanted: 'least' | 'most'): BestLimit | null {
   const rule = prepared.rules[r]!;
-  const left = new Uint8Array(prepared.rules.length);
+  const left = prepared.asleep.slice();
   left[r] = 1;
   const start = phaseOne(prepared, { left });
   if (!start.feasible) return null;
@@ -56,5 +56,5 @@ export function workingLimit(problem: BlendProblem, rule: Rule, { value, reached
 
 function hasBlend(problem: BlendProblem): boolean {
   const prepared = prepare(problem);
-  return startFrom(prepared, forcedOut(prepared).allowed).feasible;
+  return startFrom(prepared, { allowed: forcedOut(prepared).allowed }).feasible;
 }

@@ -17,6 +17,8 @@ const STILL_KEPT = 1e-11;
 export interface Around {
   /** 1 for the materials that may be used at all; all where missing. The bound holds among them. */
   among?: Uint8Array;
+  /** 1 for the rules that are left aside; those asleep where missing. */
+  left?: Uint8Array;
   /** An answer to a problem much like this one. */
   near?: Point;
 }
@@ -26,13 +28,13 @@ export interface Around {
  * blend that keeps the rules or proves that there is none, the active set goes on to the closest one, and the evidence
  * is then worked out afresh from the data.
  */
-export function closest(prepared: Prepared, { among, near }: Around = {}): Closest {
-  const { allowed, steps } = forcedOut(prepared, among);
-  const start = startFrom(prepared, allowed, near);
+export function closest(prepared: Prepared, { among, left = prepared.asleep, near }: Around = {}): Closest {
+  const { allowed, steps } = forcedOut(prepared, among, left);
+  const start = startFrom(prepared, { allowed, left }, near);
   if (!start.feasible) {
     return { kind: 'none', weights: farkas(prepared, start.weights, steps, allowed), iterations: start.iterations };
   }
-  const set = new ActiveSet(prepared, { normal: prepared.strength, allowed });
+  const set = new ActiveSet(prepared, { normal: prepared.strength, allowed, left });
   set.begin(start);
   set.run(50 * (prepared.general + prepared.facets + 50) + prepared.count);
   const lambda = new Float64Array(prepared.rules.length);
@@ -41,20 +43,22 @@ export function closest(prepared: Prepared, { among, near }: Around = {}): Close
     lambda[r] = prepared.rules[r]!.kind === 'exact' ? value : Math.max(0, value);
   }
   const point = pointOf(set);
-  const evidence = evidenceOf(prepared, { ...point, lambda, steps, allowed, ...(among ? { among } : {}) });
+  const evidence = evidenceOf(prepared, { ...point, lambda, steps, allowed, left, ...(among ? { among } : {}) });
   return { kind: 'blend', point, evidence, iterations: start.iterations + set.iterations };
 }
 
 /** The near answer where it keeps the rules as it is, or phase one from it; its materials that are out now are left. */
-export function startFrom(prepared: Prepared, allowed: Uint8Array, near?: Point): Start {
-  if (!near) return phaseOne(prepared, { allowed });
+export function startFrom(prepared: Prepared, rules: { allowed: Uint8Array; left?: Uint8Array }, near?: Point): Start {
+  const { allowed, left: aside } = rules;
+  if (!near) return phaseOne(prepared, rules);
   const left = near.materials.map((_, k) => k).filter((k) => allowed[near.materials[k]!] === 1);
   const materials = left.map((k) => near.materials[k]!);
   const grams = left.map((k) => near.grams[k]!);
-  if (!materials.some((i) => prepared.strength[i]! > 0)) return phaseOne(prepared, { allowed });
-  const kept = left.length === near.materials.length && worstViolation(prepared, materials, grams) <= STILL_KEPT;
+  if (!materials.some((i) => prepared.strength[i]! > 0)) return phaseOne(prepared, rules);
+  const kept =
+    left.length === near.materials.length && worstViolation(prepared, { materials, grams }, aside) <= STILL_KEPT;
   if (kept) return { feasible: true, materials, grams, rows: near.rows, iterations: 0 };
-  return phaseOne(prepared, { allowed, near: { materials, grams } });
+  return phaseOne(prepared, { ...rules, near: { materials, grams } });
 }
 
 function pointOf(set: ActiveSet): Point {

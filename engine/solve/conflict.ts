@@ -18,5 +18,5 @@ export function irreducibleConflict(prepared: Prepared, weights: Float64Array): 
 
 /** 1 for every rule that is not named. */
 export function allBut(prepared: Prepared, named: readonly string[]): Uint8Array {
-  return Uint8Array.from(prepared.rules, ({ rule }) => (named.includes(rule) ? 0 : 1));
+  return Uint8Array.from(prepared.rules, ({ rule, doseOf }) => (doseOf === undefined && named.includes(rule) ? 0 : 1));
 }

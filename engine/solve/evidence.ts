@@ -21,6 +21,8 @@ export interface Found {
   allowed: Uint8Array;
   /** 1 for the materials that the bound has to hold for; all where missing. */
   among?: Uint8Array;
+  /** 1 for the rules that are left aside; those asleep where missing. */
+  left?: Uint8Array;
 }
 
 /**
@@ -61,12 +63,14 @@ export function evidenceOf(prepared: Prepared, found: Found): Evidence {
   const objective = far + spread;
   const proven = leastValue(prepared, { lambda, lift, slope }, among);
   const bound = Math.min(objective, Math.max(0, objective - (along - proven)));
+  const violation = worstViolation(prepared, found, found.left);
+  const slopes = stationarity(prepared, { materials, grams, lambda, lift, slope, least: proven });
   return {
     objective,
     far,
     bound,
-    worstViolation: worstViolation(prepared, materials, grams),
-    kktResidual: stationarity(prepared, { materials, grams, lambda, lift, slope, least: proven }),
+    worstViolation: violation,
+    kktResidual: Math.max(violation, slopes),
     lambda,
   };
 }
@@ -144,7 +148,11 @@ function raiseDearest(
 }
 
 /** Largest relative excess over any rule: of the mass, or of the impact for the price at equal strength. */
-export function worstViolation(prepared: Prepared, materials: readonly number[], grams: readonly number[]): number {
+export function worstViolation(
+  prepared: Prepared,
+  { materials, grams }: Pick<Found, 'materials' | 'grams'>,
+  left = prepared.asleep,
+): number {
   const { rules, base, start, row, entry } = prepared;
   let mass = 0;
   for (let k = 0; k < materials.length; k++) mass += grams[k]!;
@@ -155,6 +163,7 @@ export function worstViolation(prepared: Prepared, materials: readonly number[],
   }
   let worst = 0;
   for (let r = 0; r < rules.length; r++) {
+    if (left[r] === 1) continue;
     const excess = rules[r]!.kind === 'exact' ? Math.abs(value[r]!) : value[r]!;
     worst = Math.max(worst, rules[r]!.per === 'mass' ? excess / mass : excess * prepared.strengthScale);
   }
@@ -175,7 +184,7 @@ function stationarity(
 ): number {
   let steepest = 0;
   for (let i = 0; i < slope.length; i++) steepest = Math.max(steepest, Math.abs(slope[i]!));
-  let worst = worstViolation(prepared, materials, grams);
+  let worst = 0;
   for (let k = 0; k < materials.length; k++) {
     const i = materials[k]!;
     let sum = lift;

@@ -13,11 +13,15 @@ export interface Forcing {
  * ceiling at the cheapest price), every material with a coefficient above 0 must stay out. Repeated until no rule does
  * so. Without this the blend would sit in a corner with no inside, where rounding decides.
  */
-export function forcedOut(prepared: Prepared, among?: Uint8Array): { allowed: Uint8Array; steps: Forcing[] } {
+export function forcedOut(
+  prepared: Prepared,
+  among?: Uint8Array,
+  left = prepared.asleep,
+): { allowed: Uint8Array; steps: Forcing[] } {
   const allowed = among ? among.slice() : new Uint8Array(prepared.count).fill(1);
   const steps: Forcing[] = [];
   for (;;) {
-    const found = forcingRows(prepared, allowed);
+    const found = forcingRows(prepared, allowed, left);
     if (found.length === 0) return { allowed, steps };
     for (const { row, sign } of found) {
       const materials: number[] = [];
@@ -30,15 +34,15 @@ export function forcedOut(prepared: Prepared, among?: Uint8Array): { allowed: Ui
   }
 }
 
-function forcingRows(prepared: Prepared, allowed: Uint8Array): { row: number; sign: 1 | -1 }[] {
+function forcingRows(prepared: Prepared, allowed: Uint8Array, left: Uint8Array): { row: number; sign: 1 | -1 }[] {
   const { rules, base, start, row, entry } = prepared;
   const above = new Int32Array(rules.length);
   const below = new Int32Array(rules.length);
   const named = new Int32Array(rules.length);
-  let left = 0;
+  let usable = 0;
   for (let i = 0; i < prepared.count; i++) {
     if (allowed[i] === 0) continue;
-    left++;
+    usable++;
     for (let at = start[i]!; at < start[i + 1]!; at++) {
       const r = row[at]!;
       const value = entry[at]! + base[r]!;
@@ -49,7 +53,8 @@ function forcingRows(prepared: Prepared, allowed: Uint8Array): { row: number; si
   }
   const found: { row: number; sign: 1 | -1 }[] = [];
   for (let r = 0; r < rules.length; r++) {
-    const others = left - named[r]!;
+    if (left[r] === 1) continue;
+    const others = usable - named[r]!;
     const positive = above[r]! + (base[r]! > 0 ? others : 0);
     const negative = below[r]! + (base[r]! < 0 ? others : 0);
     if (negative === 0 && positive > 0) found.push({ row: r, sign: 1 });

@@ -9,7 +9,7 @@ export type Start =
 export interface PhaseOneOptions {
   /** 1 for the materials that may be used; all where missing. */
   allowed?: Uint8Array;
-  /** 1 for the rules that are left aside; none where missing. */
+  /** 1 for the rules that are left aside; those asleep where missing. */
   left?: Uint8Array;
   /** Where to begin: a blend that is thought to be near. */
   near?: { materials: number[]; grams: number[] };
@@ -157,7 +157,7 @@ class FeasibleSearch {
   }
 
   private isLeft(r: number): boolean {
-    return this.options.left !== undefined && this.options.left[r] === 1;
+    return (this.options.left ?? this.prepared.asleep)[r] === 1;
   }
 
   private isAllowed(i: number): boolean {

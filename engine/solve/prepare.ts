@@ -30,6 +30,8 @@ export interface Prepared {
   start: Int32Array;
   row: Int32Array;
   entry: Float64Array;
+  /** 1 for rules that are left aside until a search turns them on: the smallest doses. */
+  asleep: Uint8Array;
   /** Rows per impact are divided by this strength. */
   strengthScale: number;
 }
@@ -126,7 +128,8 @@ function rowsByMaterial(problem: BlendProblem, materials: readonly EngineMateria
     row[at] = r;
     entry[at] = Math.abs(value + base[r]!) <= SAME ? -base[r]! : value;
   });
-  return { rules, general, base, start, row, entry, strengthScale };
+  const asleep = Uint8Array.from(rules, ({ doseOf }) => (doseOf === undefined ? 0 : 1));
+  return { rules, general, base, start, row, entry, asleep, strengthScale };
 }
 
 /** Gives a price rule another ceiling above 0, in place: the rows of a frontier differ in nothing else. */

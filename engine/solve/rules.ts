@@ -18,6 +18,8 @@ export interface Rule {
   scale: number;
   /** Amount per gram of each material that has any: a dense list, or the materials named. */
   amounts: Float64Array | { at: number[]; amount: number };
+  /** The material whose smallest dose this is: a rule only while a search takes it to be used. */
+  doseOf?: number;
 }
 
 /** A used material that is `required` weighs at least this, unless a smallest dose says more. */
@@ -90,6 +92,12 @@ export function rulesOf(
   }
   for (const [index, { id, minShare = 0 }] of materials.entries()) {
     if (minShare > 0) add(`share:${id}`, 'min', minShare, { at: [index], amount: 1 });
+  }
+  const keptIds = new Set(kept.map((line) => line.id));
+  for (const [index, { id }] of materials.entries()) {
+    if (!problem.minDose || keptIds.has(id)) continue;
+    add('minDose', 'min', problem.minDose, { at: [index], amount: 1 });
+    rules[rules.length - 1]!.doseOf = index;
   }
   const general = rules.length;
   for (const [index, { id, maxShare = 1 }] of materials.entries()) {
