@@ -76,9 +76,9 @@ describe('rules that count materials', () => {
   const target = [3, 1, 4, 1, 5, 9, 2, 6];
   const many: BlendProblem = {
     target,
-    candidates: Array.from({ length: 40 }, (_, i) => ({
+    candidates: Array.from({ length: 24 }, (_, i) => ({
       id: `m${i}`,
-      profile: target.map((_, f) => (i * 7 + f * f * 3 + i * i * f) % 11),
+      profile: target.map((_, f) => Math.round(10 * Math.abs(Math.sin(37 * i + 11 * f * f + 1)))),
       strength: 1 + (i % 5),
       costPerKg: 10,
     })),
