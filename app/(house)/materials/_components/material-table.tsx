@@ -1,7 +1,7 @@
 'use client';
 
-import { useWindowVirtualizer } from '@tanstack/react-virtual';
-import { type KeyboardEvent, useEffect, useLayoutEffect, useRef, useState } from 'react';
+import { defaultRangeExtractor, type Range, useWindowVirtualizer } from '@tanstack/react-virtual';
+import { type KeyboardEvent, type RefObject, useEffect, useLayoutEffect, useRef, useState } from 'react';
 import { classNames } from '@/app/_components/ui/class-names';
 import { SortArrow } from '@/app/_components/ui/table';
 import type { FacetView } from '@/lib/shared/facet';
@@ -29,32 +29,46 @@ const NEAR_END_ROWS = 25;
 export function MaterialTable(props: MaterialTableProps) {
   const { rows, total, facets, currency, state, setState, isStale, onNearEnd } = props;
   const body = useRef<HTMLTableSectionElement>(null);
-  const [top, setTop] = useState(0);
-  useLayoutEffect(() => setTop(body.current?.offsetTop ?? 0), []);
+  const top = useTopOf(body);
+  const [focused, setFocused] = useState<number | null>(null);
   const virtual = useWindowVirtualizer({
     count: rows.length,
     estimateSize: () => ROW_PX,
     overscan: 12,
     scrollMargin: top,
+    // A focused row must not lie under the heads, nor under the bar of a phone.
+    scrollPaddingStart: 44,
+    scrollPaddingEnd: 72,
     initialRect: { width: 1000, height: 1000 },
+    // The row with the focus stays, wherever one scrolls, or the focus would be lost.
+    rangeExtractor: (range: Range) => {
+      const seen = defaultRangeExtractor(range);
+      return focused === null || focused >= rows.length || seen.includes(focused) ? seen : [...seen, focused];
+    },
   });
   const items = virtual.getVirtualItems();
-  const last = items.at(-1)?.index ?? 0;
+  const last = virtual.range?.endIndex ?? 0;
   useEffect(() => {
     if (onNearEnd && last >= rows.length - NEAR_END_ROWS) onNearEnd();
   }, [onNearEnd, last, rows.length]);
 
+  const wanted = useRef<number | null>(null);
+  useEffect(() => {
+    // After every drawing: the row may only have come with the scroll.
+    const link = body.current?.querySelector<HTMLElement>(`[data-row="${wanted.current}"] a`);
+    if (!link) return;
+    wanted.current = null;
+    link.focus({ preventScroll: true });
+  });
   function focusRow(index: number) {
-    const wanted = Math.max(0, Math.min(rows.length - 1, index));
-    virtual.scrollToIndex(wanted, { align: 'auto' });
-    const focus = () => body.current?.querySelector<HTMLElement>(`[data-row="${wanted}"] a`)?.focus();
-    focus();
-    requestAnimationFrame(focus); // where the row was not there before the scroll
+    const row = Math.max(0, Math.min(rows.length - 1, index));
+    wanted.current = row;
+    setFocused(row);
+    virtual.scrollToIndex(row, { align: 'auto' });
   }
   function onKeyDown(event: KeyboardEvent) {
-    const row = (event.target as HTMLElement).closest<HTMLElement>('[data-row]');
-    if (!row || event.altKey || event.ctrlKey || event.metaKey) return;
-    const at = Number(row.dataset.row);
+    const at = rowAt(event.target);
+    if (at === null || event.altKey || event.ctrlKey || event.metaKey) return;
     const to: Record<string, number> = {
       ArrowDown: at + 1,
       ArrowUp: at - 1,
@@ -63,10 +77,10 @@ export function MaterialTable(props: MaterialTableProps) {
       Home: 0,
       End: rows.length - 1,
     };
-    const wanted = to[event.key];
-    if (wanted === undefined) return;
+    const next = to[event.key];
+    if (next === undefined) return;
     event.preventDefault();
-    focusRow(wanted);
+    focusRow(next);
   }
 
   return (
@@ -94,6 +108,21 @@ export function MaterialTable(props: MaterialTableProps) {
       </tbody>
     </table>
   );
+}
+
+function rowAt(target: EventTarget): number | null {
+  const row = (target as HTMLElement).closest<HTMLElement>('[data-row]');
+  return row ? Number(row.dataset.row) : null;
+}
+
+/** How far down the page it begins; what stands above it may grow and shrink. */
+function useTopOf(element: RefObject<HTMLElement | null>): number {
+  const [top, setTop] = useState(0);
+  useLayoutEffect(() => {
+    const now = element.current ? Math.round(element.current.getBoundingClientRect().top + window.scrollY) : 0;
+    if (now !== top) setTop(now);
+  });
+  return top;
 }
 
 const HEADS: readonly { sort: MaterialSort | null; words: string; numeric?: boolean; costs?: boolean; at?: string }[] =
