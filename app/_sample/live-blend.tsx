@@ -94,7 +94,7 @@ function Outcome({ answer }: { answer: SampleAnswer }) {
         {closer >= 0.005
           ? `The price holds it back: €100 more would bring it ${points.format(closer)} points closer.`
           : 'More money would hardly bring it closer.'}{' '}
-        None of these materials comes closer in this model; smell it next.
+        No other blend of these comes closer in this model; smell it next.
       </p>
     </div>
   );

@@ -22,14 +22,20 @@ export function fuzzyFilter<T>(query: string, items: readonly T[], textOf: (item
     .map(({ item }) => item);
 }
 
-/** Letters in order but apart: each jump costs, a jump to the beginning of a word hardly. */
+/**
+ * Letters in order but apart. A jump to the beginning of a word costs little; a jump into a word is let pass once, as a
+ * letter left out in haste, because with more of them nearly every name would fit.
+ */
 function scattered(wanted: string, name: string): number | null {
   let score = 400;
   let from = 0;
+  let jumps = 0;
   for (const letter of wanted) {
     const next = nextPlace(name, letter, from);
     if (next < 0) return null;
-    if (next > from) score -= startsWord(name, next) ? 2 : 12 + (next - from);
+    const intoWord = next > from && !startsWord(name, next);
+    if (intoWord && ++jumps > 1) return null;
+    if (next > from) score -= intoWord ? 12 + (next - from) : 2;
     from = next + 1;
   }
   return score;

@@ -15,6 +15,11 @@ describe('fuzzyFilter', () => {
     expect(find('neroli')).toEqual(['Néroli oil']);
   });
 
+  it('lets one letter be left out, and no more', () => {
+    expect(find('gernium')).toEqual(['Geranium oil']);
+    expect(fuzzyScore('rose', 'Castoreum resinoid')).toBeNull();
+  });
+
   it('leaves out what does not hold the letters in order', () => {
     expect(find('zz')).toEqual([]);
     expect(fuzzyScore('eso', 'rose')).toBeNull();
