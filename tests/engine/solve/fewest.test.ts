@@ -73,17 +73,19 @@ describe('rules that count materials', () => {
     fc.assert(fc.property(fourteen, expectBest), { seed: 14, numRuns: 4 });
   });
 
-  const target = [3, 1, 4, 1, 5, 9, 2, 6];
-  const many: BlendProblem = {
-    target,
-    candidates: Array.from({ length: 24 }, (_, i) => ({
-      id: `m${i}`,
-      profile: target.map((_, f) => Math.round(10 * Math.abs(Math.sin(37 * i + 11 * f * f + 1)))),
-      strength: 1 + (i % 5),
-      costPerKg: 10,
-    })),
-    maxMaterials: 4,
-  };
+  /** A target in the midst of ten materials, of which four may be used. */
+  const profile = (i: number) =>
+    Array.from({ length: 8 }, (_, f) => Math.round(10 * Math.abs(Math.sin(37 * i + 11 * f * f + 1))));
+  const candidates = Array.from({ length: 24 }, (_, i) => ({
+    id: `m${i}`,
+    profile: profile(i),
+    strength: 1,
+    costPerKg: 10,
+  }));
+  const target = Array.from({ length: 8 }, (_, f) =>
+    candidates.slice(0, 10).reduce((sum, one) => sum + one.profile[f]! / 10, 0),
+  );
+  const many: BlendProblem = { target, candidates, maxMaterials: 4 };
 
   it('stops in time with the best so far, a bound below the optimum, and says so', () => {
     const optimum = solveBlend(many);
