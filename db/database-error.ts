@@ -8,3 +8,14 @@ export function errnoOf(error: unknown): number | undefined {
   }
   return undefined;
 }
+
+/** What the driver says when the server is away or the line broke. */
+const UNREACHABLE = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'EPIPE', 'PROTOCOL_CONNECTION_LOST']);
+
+/** Whether the database could not be reached, through whatever wraps the error. */
+export function isUnreachable(error: unknown): boolean {
+  for (let cause = error; cause instanceof Error; cause = cause.cause) {
+    if ('code' in cause && typeof cause.code === 'string' && UNREACHABLE.has(cause.code)) return true;
+  }
+  return false;
+}

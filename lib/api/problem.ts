@@ -1,5 +1,7 @@
 import 'server-only';
 import { randomUUID } from 'node:crypto';
+import { isUnreachable } from '@/db/database-error';
+import { DatabaseBusy } from '@/db/transaction';
 import { EngineInputError } from '@/engine/errors';
 import { Conflict, Forbidden, Invalid, NotFound, TooMany } from '@/lib/errors';
 import { log } from '@/lib/log';
@@ -14,11 +16,15 @@ export interface Problem {
   requestId?: string;
 }
 
+/** When to try again after the database was busy or away, in seconds. */
+const RETRY_S = 5;
+
 /** The one place that turns a refusal into a response. Anything unforeseen is a 500 whose text stays in the log. */
 export function problemResponse(error: unknown): Response {
   const problem = problemOf(error);
   const headers = new Headers({ 'content-type': 'application/problem+json', 'cache-control': 'no-store' });
   if (error instanceof TooMany) headers.set('retry-after', String(error.retryAfterS));
+  if (problem.status === 503) headers.set('retry-after', String(RETRY_S));
   return new Response(JSON.stringify({ type: 'about:blank', ...problem }), { status: problem.status, headers });
 }
 
@@ -38,6 +44,14 @@ function problemOf(error: unknown): Problem {
   if (error instanceof Conflict)
     return { status: 409, title: 'Changed meanwhile', detail: error.message, current: error.current };
   if (error instanceof TooMany) return { status: 429, title: 'Too often', detail: error.message };
+  if (error instanceof DatabaseBusy || isUnreachable(error)) {
+    log.warn({ event: 'database_unavailable', err: error });
+    return {
+      status: 503,
+      title: 'Not now',
+      detail: 'The house’s records can’t be written at this moment. Try again soon.',
+    };
+  }
   const requestId = randomUUID();
   log.error({ event: 'unexpected_error', requestId, err: error });
   return {
