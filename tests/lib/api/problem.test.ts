@@ -4,7 +4,7 @@ import { problemResponse } from '@/lib/api/problem';
 import { Conflict, Forbidden, Invalid, NotFound, TooMany } from '@/lib/errors';
 import { log } from '@/lib/log';
 
-const body = async (error: unknown) => {
+const body = async (error: unknown): Promise<{ status: number; headers: Headers; requestId?: string }> => {
   const response = problemResponse(error);
   return {
     status: response.status,
