@@ -1,16 +1,5 @@
 import type { NextConfig } from 'next';
-
-/** On every answer, built files too. The content security policy changes with each request: `proxy.ts`. */
-const HEADERS = {
-  'X-Content-Type-Options': 'nosniff',
-  'X-Frame-Options': 'DENY',
-  'Strict-Transport-Security': 'max-age=63072000; includeSubDomains',
-  'Referrer-Policy': 'same-origin',
-  'Cross-Origin-Opener-Policy': 'same-origin',
-  'Cross-Origin-Resource-Policy': 'same-origin',
-  'Permissions-Policy':
-    'accelerometer=(), browsing-topics=(), camera=(), display-capture=(), geolocation=(), gyroscope=(), microphone=(), payment=(), usb=()',
-};
+import { FIXED_HEADERS } from './lib/shared/fixed-headers';
 
 const config: NextConfig = {
   turbopack: { root: import.meta.dirname },
@@ -21,7 +10,7 @@ const config: NextConfig = {
   // Nothing here serves other people's pictures, and the optimiser has been a way in more than once.
   images: { unoptimized: true },
   headers: async () => [
-    { source: '/:path*', headers: Object.entries(HEADERS).map(([key, value]) => ({ key, value })) },
+    { source: '/:path*', headers: Object.entries(FIXED_HEADERS).map(([key, value]) => ({ key, value })) },
   ],
 };
 

@@ -1,4 +1,6 @@
 import { type NextRequest, NextResponse } from 'next/server';
+import { isSameOrigin } from '@/lib/auth/origin';
+import { FIXED_HEADERS } from '@/lib/shared/fixed-headers';
 
 /**
  * Runs before every page and route. It is a courtesy to the browser and no lock: who may do what is checked beside
@@ -12,6 +14,7 @@ export function proxy(request: NextRequest): NextResponse {
   const isApi = request.nextUrl.pathname.startsWith('/api/');
   const nonce = Buffer.from(crypto.getRandomValues(new Uint8Array(16))).toString('base64');
   const policy = isApi ? API_POLICY : pagePolicy(nonce);
+  if (!READS.has(request.method) && !isSameOrigin(request.headers)) return notFromHere();
   const headers = new Headers(request.headers);
   headers.set('x-nonce', nonce); // whatever a stranger sent under these two names is gone
   headers.set('content-security-policy', policy);
@@ -21,9 +24,24 @@ export function proxy(request: NextRequest): NextResponse {
   return response;
 }
 
-/** Built files have a policy of their own kind in `next.config.ts`, and may be kept by the browser. */
+/** A change that comes from elsewhere is turned away before any action is decoded; routes and actions ask once more. */
+function notFromHere(): NextResponse {
+  const problem = { type: 'about:blank', status: 403, title: 'Not from here' };
+  return new NextResponse(JSON.stringify({ ...problem, detail: 'A change must come from Stillroom’s own pages.' }), {
+    status: 403,
+    headers: {
+      'content-type': 'application/problem+json',
+      'content-security-policy': API_POLICY,
+      'cache-control': NOT_KEPT,
+      ...FIXED_HEADERS,
+    },
+  });
+}
+
+/** Built files hold nothing of a house, and may be kept by the browser. */
 export const config = { matcher: ['/((?!_next/static/).*)'] };
 
+const READS = new Set(['GET', 'HEAD']);
 const NOT_KEPT = 'private, no-store';
 /** An answer of the API is data: opened as a page, it may do nothing. */
 const API_POLICY = "default-src 'none'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'";

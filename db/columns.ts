@@ -11,11 +11,13 @@ import { customType, datetime, decimal, int } from 'drizzle-orm/mysql-core';
 /** A time-ordered id made by the application (26 characters; see lib/id.ts). */
 export const idColumn = customType<{ data: string }>({
   dataType: () => 'char(26) character set ascii collate ascii_bin',
+  toDriver: asciiOrNobody,
 });
 
 /** A short machine word, such as a role or a unit. */
 export const codeColumn = customType<{ data: string; config: { length: number } }>({
   dataType: (config) => `varchar(${config?.length ?? 32}) character set ascii collate ascii_bin`,
+  toDriver: asciiOrNobody,
 });
 
 /** Text that compares exactly, letter case and accents included. */
@@ -49,3 +51,8 @@ export const instant = () => datetime({ mode: 'date', fsp: 3 });
 export const createdAt = () => instant().notNull().default(sql`(utc_timestamp(3))`);
 /** Counts the writes to a row; a write names the revision it read. */
 export const revision = () => int().notNull().default(1);
+
+/** A stranger may ask for the id “é”: MariaDB would fail to compare it with a column of ASCII. No row is called “?”. */
+function asciiOrNobody(text: string): string {
+  return /^[\x20-\x7e]*$/.test(text) ? text : '?';
+}

@@ -8,5 +8,13 @@ export const log = pino({
   base: null,
   timestamp: pino.stdTimeFunctions.isoTime,
   redact: ['*.password', '*.token', '*.cookie', 'password', 'token', 'cookie'],
-  serializers: { err: toldError },
+  hooks: {
+    // Of an error pino would repeat the whole message beside it, values and all; of a plain object it doesn't.
+    logMethod(args, method) {
+      const [first] = args as unknown[];
+      if (first && typeof first === 'object' && 'err' in first)
+        Object.assign(args, [{ ...first, err: toldError(first.err) }]);
+      method.apply(this, args);
+    },
+  },
 });

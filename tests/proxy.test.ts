@@ -70,3 +70,25 @@ it('optimises no image, caches no component, says nothing of itself', () => {
   expect(nextConfig.cacheComponents).toBeUndefined();
   expect(nextConfig.rewrites ?? nextConfig.redirects).toBeUndefined();
 });
+
+it.each(['/sign-in', '/materials', '/api/v1/materials', '/no-such-page'])(
+  'turns a change of %s away that does not come from our own pages',
+  (path) => {
+    const asked = (headers: Record<string, string>) =>
+      proxy(new NextRequest(`http://localhost${path}`, { method: 'POST', headers: { host: 'localhost', ...headers } }));
+    for (const headers of [
+      {},
+      { 'sec-fetch-site': 'cross-site' },
+      { origin: 'https://elsewhere.example' },
+      { origin: 'https://elsewhere.example', 'x-forwarded-host': 'elsewhere.example' },
+      { 'x-middleware-subrequest': 'proxy:proxy:proxy:proxy:proxy' },
+    ]) {
+      const refused = asked(headers as Record<string, string>);
+      expect(refused.status, JSON.stringify(headers)).toBe(403);
+      expect(refused.headers.get('content-security-policy')).toContain("default-src 'none'");
+      expect(refused.headers.get('cache-control')).toContain('no-store');
+    }
+    expect(asked({ 'sec-fetch-site': 'same-origin' }).status).toBe(200);
+    expect(asked({ origin: 'http://localhost' }).status).toBe(200);
+  },
+);

@@ -1,5 +1,6 @@
 import 'server-only';
 import { type IncomingMessage, Server, type ServerResponse } from 'node:http';
+import { FIXED_HEADERS } from '@/lib/shared/fixed-headers';
 
 const READ = ['GET', 'HEAD'];
 /** Pages take POST for server actions. */
@@ -24,7 +25,8 @@ export function refuseMethods(): void {
   Server.prototype.emit = function (this: Server, event: string, ...args: unknown[]) {
     const [request, response] = args as [IncomingMessage, ServerResponse];
     if (event !== 'request' || isAllowed(request)) return emit.call(this, event, ...args);
-    response.writeHead(405, { Allow: allowedMethods(request.url ?? '').join(', ') }).end();
+    const allow = allowedMethods(request.url ?? '').join(', ');
+    response.writeHead(405, { ...FIXED_HEADERS, Allow: allow, 'Cache-Control': 'no-store' }).end();
     return true;
   };
 }

@@ -1,6 +1,6 @@
 import 'server-only';
 import type { Member } from '@/lib/auth/member';
-import { Invalid } from '@/lib/errors';
+import { Invalid, TooMany } from '@/lib/errors';
 import { listFacets } from '@/lib/facets/queries';
 import { readLimitTables } from '@/lib/limits/queries';
 import { type BlendRequest, RequestFault } from '@/lib/shared/blend-input';
@@ -27,8 +27,29 @@ export async function solveRequest(ctx: Member, request: BlendRequest, signal?: 
     listFacets(ctx),
   ]);
   const built = buildOrRefuse(request, { facetIds: candidates.facetIds, candidates: candidates.items, limits });
-  const { solution, certificate } = await solveInPool(built.problem, { timeLimitMs: TIME_LIMIT_MS, signal });
+  const { solution, certificate } = await inTurn(ctx.userId, () =>
+    solveInPool(built.problem, { timeLimitMs: TIME_LIMIT_MS, signal }),
+  );
   return { request, built, facets, currency: candidates.currency, solution, certificate };
+}
+
+/** So many solves of one person may be at work or wait, so that nobody fills the queue before the others. */
+const MOST_OF_ONE_PERSON = 4;
+const RETRY_S = 10;
+const atWork = new Map<string, number>();
+
+async function inTurn<T>(userId: string, work: () => Promise<T>): Promise<T> {
+  const others = atWork.get(userId) ?? 0;
+  if (others >= MOST_OF_ONE_PERSON)
+    throw new TooMany(`${others} of your blends are being solved. Wait for one of them.`, RETRY_S);
+  atWork.set(userId, others + 1);
+  try {
+    return await work();
+  } finally {
+    const left = (atWork.get(userId) ?? 1) - 1;
+    if (left > 0) atWork.set(userId, left);
+    else atWork.delete(userId);
+  }
 }
 
 function buildOrRefuse(...args: Parameters<typeof buildBlendProblem>): BuiltProblem {

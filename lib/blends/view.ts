@@ -50,8 +50,9 @@ export function solvedView(ctx: Pick<Member, 'roles'>, solved: Solution): Solved
     proof: answer.proof,
     cautions: answer.cautions,
     clash: answer.clash && {
-      rules: answer.clash.rules,
-      ways: answer.clash.ways.map(({ words, request: changed }) => ({ words, request: changed })),
+      // Rules and ways out are told in figures of price.
+      rules: seesPrices ? answer.clash.rules : [],
+      ways: seesPrices ? answer.clash.ways.map(({ words, request: changed }) => ({ words, request: changed })) : [],
     },
     certificate: finite(certificate),
   };

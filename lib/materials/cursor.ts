@@ -3,7 +3,7 @@ import { z } from 'zod';
 import { Invalid } from '@/lib/errors';
 import type { MaterialSort, SortOrder } from '@/lib/shared/material-list';
 
-const content = z.tuple([z.string(), z.string(), z.string().nullable(), z.string()]);
+const content = z.tuple([z.string(), z.string(), z.string().nullable(), z.string().regex(/^[0-9A-Z]{26}$/)]);
 
 /** The key of a page's last row, with the order it belongs to. It holds nothing that the page did not show. */
 export function cursorOf(sort: MaterialSort, order: SortOrder, last: { key: string | null; id: string }): string {

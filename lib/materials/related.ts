@@ -2,7 +2,7 @@ import 'server-only';
 import { eq } from 'drizzle-orm';
 import { db } from '@/db/connection';
 import { materials } from '@/db/schema';
-import { relatedMaterials } from '@/engine';
+import { profileAngle } from '@/engine';
 import { demand, type Member } from '@/lib/auth/member';
 import { NotFound } from '@/lib/errors';
 import { listFacets } from '@/lib/facets/queries';
@@ -19,10 +19,7 @@ const SHARED_SHOWN = 4;
 /** What this material is close to: by the cosine of the facets, closest first. @throws NotFound */
 export async function listRelated(ctx: Member, id: string): Promise<RelatedMaterial[]> {
   demand(ctx, 'material.read');
-  const all = await db
-    .select({ id: materials.id, strength: materials.strength })
-    .from(materials)
-    .where(eq(materials.teamId, ctx.teamId));
+  const all = await db.select({ id: materials.id }).from(materials).where(eq(materials.teamId, ctx.teamId));
   if (!all.some((row) => row.id === id)) throw new NotFound();
   const facetIds = (await listFacets(ctx)).map((facet) => facet.id);
   if (facetIds.length === 0) return []; // the engine takes no empty vector
@@ -30,12 +27,10 @@ export async function listRelated(ctx: Member, id: string): Promise<RelatedMater
     ctx,
     all.map((row) => row.id),
   );
-  const engineMaterials = all.map((row) => ({ ...row, profile: smellOf(row.id).profile, costPerKg: 0 }));
-  const links = relatedMaterials(engineMaterials, { top: SHOWN, minSimilarity: MIN_SIMILARITY, by: 'facets' });
-  const close = links
-    .filter(({ a, b }) => a === id || b === id)
-    .slice(0, SHOWN)
-    .map(({ a, b, similarity }) => ({ id: a === id ? b : a, similarity }));
+  const close = closest(
+    smellOf(id).profile,
+    all.filter((row) => row.id !== id).map((row) => ({ id: row.id, profile: smellOf(row.id).profile })),
+  );
   const { items } = await materialRows(
     ctx,
     close.map((each) => each.id),
@@ -53,6 +48,20 @@ export async function listRelated(ctx: Member, id: string): Promise<RelatedMater
     sharedFacetIds: sharedFacets(smellOf(id).profile, row.profile, facetIds),
     ...(row.costAtEqualStrength && { costAtEqualStrength: row.costAtEqualStrength }),
   }));
+}
+
+/** Against this one profile only: comparing all materials with all others would hold the server up for seconds. */
+function closest(profile: number[], others: { id: string; profile: number[] }[]) {
+  return others
+    .map((other) => ({ id: other.id, similarity: likeness(profile, other.profile) }))
+    .filter(({ similarity }) => similarity >= MIN_SIMILARITY)
+    .sort((a, b) => b.similarity - a.similarity || (a.id < b.id ? -1 : 1))
+    .slice(0, SHOWN);
+}
+
+function likeness(one: number[], other: number[]): number {
+  const angle = profileAngle(one, other);
+  return angle === null ? 0 : Math.cos(angle);
 }
 
 /** The facets that make two profiles alike, the greatest product first. */

@@ -1,9 +1,11 @@
 import { inspect } from 'node:util';
 import { eq } from 'drizzle-orm';
-import { beforeAll, expect, it } from 'vitest';
+import pino from 'pino';
+import { beforeAll, expect, it, vi } from 'vitest';
 import { suppliers, users } from '@/db/schema';
 import { toldError } from '@/db/told-error';
 import { newId } from '@/lib/id';
+import { log } from '@/lib/log';
 import { db, makeTeam } from '../support/database';
 
 const SECRET = 'heronmere-7316';
@@ -61,4 +63,16 @@ it('keeps the words of every other error, and takes what is no error', () => {
     cause: { message: 'why' },
   });
   expect(toldError(SECRET)).toEqual({ type: 'string', message: 'Not an error was thrown.', stack: [] });
+});
+
+it('writes no value into the log either, in whatever field', async () => {
+  const lines: string[] = [];
+  const stream = (log as unknown as Record<symbol, { write: (line: string) => void }>)[pino.symbols.streamSym];
+  vi.spyOn(stream as { write: (line: string) => void }, 'write').mockImplementation((line) => void lines.push(line));
+  for (const error of failed) log.error({ event: 'unexpected_error', err: error });
+  expect(lines).toHaveLength(failed.length);
+  for (const line of lines) {
+    expect(JSON.parse(line).err.message).toContain('Failed query');
+    expect(line).not.toContain(SECRET);
+  }
 });

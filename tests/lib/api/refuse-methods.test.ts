@@ -34,6 +34,8 @@ it.each([
   const response = await ask(method, path);
   expect(response.statusCode).toBe(405);
   expect(response.headers.allow?.split(', ')).not.toContain(method);
+  expect(response.headers).toMatchObject({ 'x-content-type-options': 'nosniff', 'cache-control': 'no-store' });
+  expect(response.headers).toHaveProperty('strict-transport-security');
 });
 
 it.each([
