@@ -27,8 +27,10 @@ export function percent(fraction: number): string {
 /** A share in a column: two digits after the point, more for traces, so that a trace is not 0. */
 export function shareInColumn(fraction: number): string {
   const value = fraction * 100;
-  if (value >= 1) return fine.format(value);
-  return value >= 0.0001 ? plain({ maximumSignificantDigits: 2 }).format(value) : '< 0.0001';
+  if (value >= 0.1) return fine.format(value);
+  return value >= 0.0001
+    ? plain({ minimumSignificantDigits: 2, maximumSignificantDigits: 2 }).format(value)
+    : '< 0.0001';
 }
 
 /** The next round step (1, 2 or 5 times a power of ten) not above a value. */
@@ -46,6 +48,12 @@ export function roundOut(value: number, direction: 'up' | 'down'): number {
   const safe = direction === 'up' ? value * (1 + 1e-8) : value * (1 - 1e-8);
   const rounded = direction === 'up' ? Math.ceil(safe / step) : Math.floor(safe / step);
   return Number((rounded * step).toPrecision(4));
+}
+
+/** An impact share in a column, in per cent: a nose knows no second digit after the point. */
+export function impactInColumn(fraction: number): string {
+  const value = fraction * 100;
+  return value < 0.05 ? '< 0.1' : plain({ minimumFractionDigits: 1, maximumFractionDigits: 1 }).format(value);
 }
 
 /** A list as it is spoken: "A, B and C". */

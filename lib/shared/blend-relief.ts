@@ -40,7 +40,7 @@ function reliefOf(
   switch (rule.kind) {
     case 'price per kg':
     case 'price at equal strength': {
-      const step = roundStep(Number(request.ceiling?.amount ?? 1) * 0.06);
+      const step = roundStep(Number(request.ceiling?.amount ?? 1) * 0.1);
       const perUnit = rule.kind === 'price per kg' ? slope : slope / built.target.referenceStrength;
       return relief('The price ceiling', `${pricePerKg(step, currency)} more`, -perUnit * step);
     }
@@ -88,10 +88,14 @@ function relief(what: string, step: string, closer: number): Pick<Relief, 'close
   return { what, closer, words: sentence.charAt(0).toUpperCase() + sentence.slice(1) };
 }
 
+/** Said also where a rule bites so little that nobody would smell it. */
+const NOTHING_HOLDS =
+  'Your rules cost next to nothing: a little more room in any of them would not bring it noticeably closer.';
+
 /** "The price ceiling is what holds you back: 10 EUR/kg more would bring it about 0.08 points closer on ..." */
 export function heldBackBy(found: readonly Relief[]): string[] {
   const [first, ...others] = found;
-  if (!first) return ['None of your rules holds it back: these materials come no closer to this smell.'];
+  if (!first) return [NOTHING_HOLDS];
   const sentence = `${first.what} is what holds you back: ${first.words.charAt(0).toLowerCase()}${first.words.slice(1)}`;
   const more = others.slice(0, 2).map(({ what }) => what.charAt(0).toLowerCase() + what.slice(1).replace(/,$/, ''));
   return more.length > 0 ? [sentence, `After that come ${listed(more)}.`] : [sentence];

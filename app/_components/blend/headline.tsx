@@ -14,11 +14,11 @@ export interface HeadlineProps {
 
 /** The answer in figures: how near, for how much, how strong, how natural. */
 export function Headline({ distance, expectedDistance, targetName, strengthOfTarget, natural, money }: HeadlineProps) {
-  const target = targetName ?? 'linalool';
+  const target = targetName ? 'the target' : 'linalool';
   return (
-    <dl className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-[auto_auto_auto_auto_1fr]">
+    <dl className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
       <Figure term="Distance" value={pointsOf(distance)} big>
-        points of 0–10; {pointsOf(expectedDistance)} with the noses’ spread
+        points of the 0–10 scale; {pointsOf(expectedDistance)} with the spread between noses
       </Figure>
       {money ? (
         <>
@@ -31,7 +31,7 @@ export function Headline({ distance, expectedDistance, targetName, strengthOfTar
         </>
       ) : null}
       <Figure term="Strength" value={percent(strengthOfTarget)}>
-        of {target}
+        of {target}’s
       </Figure>
       <Figure term="Natural" value={percent(natural)}>
         of its mass
@@ -47,13 +47,13 @@ function compared(cost: number, money: { targetCostPerKg: number | null; currenc
 
 function Figure({ term, value, big, children }: { term: string; value: string; big?: boolean; children: ReactNode }) {
   return (
-    <div className="min-w-0">
+    <div className="min-w-24">
       <dt className="narrow text-ink-soft">{term}</dt>
       <dd className="grid">
         <span className={`figures whitespace-nowrap ${big ? 'text-title font-[600]' : 'text-lead font-[560]'}`}>
           {value}
         </span>
-        <span className="max-w-40 text-note text-ink-soft">{children}</span>
+        <span className="max-w-48 text-note text-ink-soft">{children}</span>
       </dd>
     </div>
   );

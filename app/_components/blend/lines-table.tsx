@@ -1,6 +1,6 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
-import { percent, shareInColumn } from '@/lib/shared/blend-figures';
+import { impactInColumn, shareInColumn } from '@/lib/shared/blend-figures';
 import type { FacetTone } from '@/lib/shared/facet';
 import type { Phase } from '../strip/segments';
 import { Strip } from '../strip/strip';
@@ -41,8 +41,15 @@ export function LinesTable({ facets, lines, currency, actionsOf }: LinesTablePro
         <tr>
           <Th>Material</Th>
           <Th numeric>Mass, %</Th>
-          <Th>Of the smell, %</Th>
-          {currency ? <Th numeric>{currency} in 1 kg</Th> : null}
+          <Th>
+            <span className="max-sm:hidden">Of the s</span>
+            <span className="sm:hidden">S</span>mell, %
+          </Th>
+          {currency ? (
+            <Th numeric className="max-sm:hidden">
+              {currency} in 1 kg
+            </Th>
+          ) : null}
           {actionsOf ? (
             <Th>
               <span className="sr-only">Rules for it</span>
@@ -72,7 +79,11 @@ export function LinesTable({ facets, lines, currency, actionsOf }: LinesTablePro
             <Td>
               <ImpactBar impact={line.impact} />
             </Td>
-            {currency ? <Td numeric>{line.costPart === null ? '' : money.format(line.costPart)}</Td> : null}
+            {currency ? (
+              <Td numeric className="max-sm:hidden">
+                {line.costPart === null ? '' : money.format(line.costPart)}
+              </Td>
+            ) : null}
             {actionsOf ? <Td className="w-[1%] whitespace-nowrap">{actionsOf(line)}</Td> : null}
           </tr>
         ))}
@@ -87,7 +98,7 @@ export function LinesTable({ facets, lines, currency, actionsOf }: LinesTablePro
           </Td>
           <Td className="border-b-0" />
           {currency ? (
-            <Td numeric className="border-b-0">
+            <Td numeric className="border-b-0 max-sm:hidden">
               {money.format(total)}
             </Td>
           ) : null}
@@ -100,11 +111,11 @@ export function LinesTable({ facets, lines, currency, actionsOf }: LinesTablePro
 
 function ImpactBar({ impact }: { impact: number }) {
   return (
-    <span className="flex min-w-28 items-center gap-2">
-      <span aria-hidden="true" className="h-2 flex-1 border-l border-ink">
+    <span className="flex items-center justify-end gap-2 sm:min-w-24">
+      <span aria-hidden="true" className="h-2 flex-1 border-l border-ink max-sm:hidden">
         <span className="block h-full bg-ink" style={{ width: `${Math.min(1, impact) * 100}%` }} />
       </span>
-      <span className="figures w-12 text-right">{percent(impact).replace(' %', '').replace('less than ', '< ')}</span>
+      <span className="figures w-9 text-right">{impactInColumn(impact)}</span>
     </span>
   );
 }

@@ -4,7 +4,6 @@ import { type BlendLineShown, LinesTable } from '@/app/_components/blend/lines-t
 import { Sentences } from '@/app/_components/blend/sentences';
 import { Verdicts } from '@/app/_components/blend/verdicts';
 import { ProfileBars } from '@/app/_components/charts/profile-bars';
-import { Button } from '@/app/_components/ui/button';
 import type { BlendAnswer } from '@/lib/shared/blend-answer';
 import { isIncomplete } from '@/lib/shared/blend-candidate';
 import type { BlendRequest } from '@/lib/shared/blend-input';
@@ -26,7 +25,7 @@ export const AnswerPanel = memo(function AnswerPanel(props: AnswerPanelProps) {
   const { target } = asked;
   if (answer.clash) return <ClashPanel clash={answer.clash} proof={answer.proof} onChange={onChange} />;
   return (
-    <div className="grid gap-6 pt-5 pb-6">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-6 pt-5 pb-6">
       <Faults sentences={Object.values(faults)} />
       <div className="grid gap-5 px-5 md:px-6">
         <h2 className="sr-only">The closest blend</h2>
@@ -90,6 +89,30 @@ function shownLines(answer: BlendAnswer): BlendLineShown[] {
   }));
 }
 
+interface LineButtonProps {
+  label: string;
+  isPressed?: boolean;
+  onPress: () => void;
+  drawing: string;
+}
+
+function LineButton({ label, isPressed, onPress, drawing }: LineButtonProps) {
+  return (
+    <button
+      type="button"
+      aria-label={label}
+      aria-pressed={isPressed}
+      title={label}
+      onClick={onPress}
+      className="grid size-8 place-items-center rounded-tile border border-transparent text-ink-soft hover:bg-wash hover:text-ink aria-pressed:border-ink aria-pressed:text-ink"
+    >
+      <svg viewBox="0 0 14 14" width="14" height="14" aria-hidden="true">
+        <path d={drawing} fill="none" stroke="currentColor" strokeWidth="1.3" />
+      </svg>
+    </button>
+  );
+}
+
 interface LineActionsProps {
   line: BlendLineShown;
   request: BlendRequest;
@@ -102,25 +125,17 @@ function LineActions({ line, request, onChange }: LineActionsProps) {
   const keep = isKept ? null : { kind: 'kept' as const, share: Number(line.share.toPrecision(3)) };
   return (
     <span className="flex justify-end gap-1">
-      <Button
-        size="small"
-        look="quiet"
-        aria-pressed={isKept}
-        aria-label={`Keep ${line.name} at this share`}
-        className="px-2 aria-pressed:border-ink"
-        onClick={() => onChange(withMaterialRule(request, line.id, keep))}
-      >
-        {isKept ? 'Kept' : 'Keep'}
-      </Button>
-      <Button
-        size="small"
-        look="quiet"
-        aria-label={`Leave out ${line.name}`}
-        className="px-2"
-        onClick={() => onChange(withMaterialRule(request, line.id, { kind: 'excluded' }))}
-      >
-        Leave out
-      </Button>
+      <LineButton
+        label={`Keep ${line.name} at this share`}
+        isPressed={isKept}
+        onPress={() => onChange(withMaterialRule(request, line.id, keep))}
+        drawing={isKept ? 'M3 7V5a4 4 0 0 1 8 0v2M2 7h10v6H2Z' : 'M3 7V5a4 4 0 0 1 7.700-1.500M2 7h10v6H2Z'}
+      />
+      <LineButton
+        label={`Leave out ${line.name}`}
+        onPress={() => onChange(withMaterialRule(request, line.id, { kind: 'excluded' }))}
+        drawing="m2.500 2.500 9 9M11.500 2.500l-9 9"
+      />
     </span>
   );
 }

@@ -51,13 +51,15 @@ export function BlendBench({ facets, currency, maySave, start, inputs, tables, o
   );
   const byId = useMemo(() => new Map(inputs.candidates.map((one) => [one.id, one])), [inputs]);
   const parts = { facets, currency, inputs, tables, byId, faults };
-  const rules = request ? <RulesPanel {...parts} request={request} answer={answer} onChange={change} /> : null;
+  const rules = request ? (
+    <RulesPanel {...parts} request={request} answer={answer} isInSheet={!isWide} onChange={change} />
+  ) : null;
 
   return (
     <>
       <ScreenHead
         title="Blend"
-        about="The closest blend of other materials, within a price and within limits. Closest in this model; smell it next."
+        about="The closest blend of other materials, within a price and within limits."
         actions={
           <>
             <ButtonLink href="/blends">Saved blends</ButtonLink>
@@ -70,12 +72,16 @@ export function BlendBench({ facets, currency, maySave, start, inputs, tables, o
           The part of this page that solves has stopped. Saved blends are not touched by it.
         </ErrorState>
       ) : null}
-      <div className="tiles lg:grid-cols-[19rem_minmax(0,1fr)] xl:grid-cols-[18.5rem_18.5rem_minmax(0,1fr)]">
-        <div className="lg:row-span-2 xl:row-span-1">
-          <TargetPanel {...parts} request={request} isFolded={!isWide} onChange={change} />
+      <div className="tiles lg:grid-cols-[19rem_minmax(0,1fr)] lg:grid-rows-[auto_1fr] xl:grid-cols-[18.5rem_20rem_minmax(0,1fr)]">
+        <div className="xl:row-span-2">
+          <div className={column}>
+            <TargetPanel {...parts} request={request} isFolded={!isWide} onChange={change} />
+          </div>
         </div>
-        {isWide && rules ? <div className="lg:order-last xl:order-none">{rules}</div> : null}
-        <div className="lg:row-span-3 xl:row-span-1">
+        <div className={isWide ? 'lg:order-last xl:order-none xl:row-span-2' : 'hidden'}>
+          <div className={column}>{isWide ? rules : null}</div>
+        </div>
+        <div className="lg:row-span-2">
           {request && answer && solved && asked ? (
             <AnswerPanel {...parts} request={request} answer={answer} solved={solved} asked={asked} onChange={change} />
           ) : (
@@ -109,6 +115,9 @@ export function BlendBench({ facets, currency, maySave, start, inputs, tables, o
     </>
   );
 }
+
+/** At the desk target and rules stay in sight while the answer is read. */
+const column = 'xl:sticky xl:top-0 xl:max-h-dvh xl:overflow-y-auto';
 
 function NothingYet({ faults, hasRequest }: { faults: Record<string, string>; hasRequest: boolean }) {
   const sentences = Object.values(faults);

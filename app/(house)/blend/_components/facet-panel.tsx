@@ -52,9 +52,9 @@ export const FacetPanel = memo(function FacetPanel({ request, facets, profile, o
         value={query}
         onChange={(event) => setQuery(event.target.value)}
       />
-      <div className="narrow grid grid-cols-[6.2rem_minmax(0,1fr)_4.6rem] gap-x-2 text-note text-ink-soft">
+      <div className="narrow grid grid-cols-[5.8rem_minmax(0,1fr)_3.1rem] gap-x-2 text-note text-ink-soft">
         <span>Facet</span>
-        <span>Intensity, 0–10</span>
+        <span>0–10</span>
         <span>Counts</span>
       </div>
       {[...families].map(([family, list]) => (

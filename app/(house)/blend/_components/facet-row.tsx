@@ -2,11 +2,11 @@ import type { FacetView } from '@/lib/shared/facet';
 import { facetColour } from '@/lib/shared/facet-colour';
 
 const WEIGHTS: readonly [weight: number, words: string][] = [
-  [0, 'not at all'],
-  [0.5, 'half'],
-  [1, 'as usual'],
-  [2, 'double'],
-  [4, 'four times'],
+  [0, 'no'],
+  [0.5, '× ½'],
+  [1, '× 1'],
+  [2, '× 2'],
+  [4, '× 4'],
 ];
 
 interface FacetRowProps {
@@ -21,7 +21,7 @@ interface FacetRowProps {
 /** One bar, drawn by pulling it; underneath lies the browser's own slider, with its keys. */
 export function FacetRow({ facet, intensity, weight, onWeight, onIntensity }: FacetRowProps) {
   return (
-    <div className="grid min-h-7 grid-cols-[6.2rem_minmax(0,1fr)_4.6rem] items-center gap-x-2">
+    <div className="grid min-h-7 grid-cols-[5.8rem_minmax(0,1fr)_3.1rem] items-center gap-x-2">
       <span className={weight === 0 ? 'truncate text-ink-faint line-through' : 'truncate'} title={facet.description}>
         {facet.name}
       </span>
@@ -63,7 +63,7 @@ export function FacetRow({ facet, intensity, weight, onWeight, onIntensity }: Fa
         aria-label={`How much ${facet.name} counts`}
         value={weight}
         onChange={(event) => onWeight(Number(event.target.value))}
-        className={`min-h-6 w-full rounded-tile border bg-paper px-1 text-note ${weight === 1 ? 'border-grout text-ink-soft' : 'border-ink font-[560]'}`}
+        className={`min-h-6 w-full rounded-tile border bg-paper px-0.5 text-note ${weight === 1 ? 'border-grout text-ink-soft' : 'border-ink font-[560]'}`}
       >
         {WEIGHTS.map(([value, words]) => (
           <option key={value} value={value}>

@@ -14,15 +14,17 @@ import { ReliefNote } from './relief-note';
 export interface RulesProps extends BenchParts {
   request: BlendRequest;
   answer: BlendAnswer | null;
+  /** In a sheet, which says the title itself. */
+  isInSheet?: boolean;
 }
 
 export function RulesPanel(props: RulesProps) {
-  const { request, answer, byId, onChange } = props;
+  const { request, answer, byId, isInSheet, onChange } = props;
   const targetName =
     request.target.kind === 'material' ? (byId.get(request.target.materialId)?.name ?? 'the target') : 'linalool';
   const reliefOf = (...kinds: Relief['kind'][]) => answer?.reliefs.filter(({ kind }) => kinds.includes(kind)) ?? [];
   return (
-    <Tile title="Rules">
+    <Tile title={isInSheet ? undefined : 'Rules'}>
       <div className="grid gap-6">
         <PriceRule {...props} reliefs={reliefOf('price per kg', 'price at equal strength')} />
         <div>

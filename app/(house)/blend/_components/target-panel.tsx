@@ -1,7 +1,7 @@
 import { Strip } from '@/app/_components/strip/strip';
 import { Button } from '@/app/_components/ui/button';
 import { Combobox } from '@/app/_components/ui/combobox';
-import { Facts, Tile } from '@/app/_components/ui/screen';
+import { Tile } from '@/app/_components/ui/screen';
 import type { Candidate } from '@/lib/shared/blend-candidate';
 import { percent, pricePerKg } from '@/lib/shared/blend-figures';
 import { type BlendRequest, requestFor } from '@/lib/shared/blend-input';
@@ -107,13 +107,9 @@ function MaterialFacts({ material, facets, currency }: MaterialFactsProps) {
       <Strip size="line" facets={facets} profile={profile} phases={phases} name={name} />
       <div className="min-w-0 flex-1">
         <p className="pb-1 text-ink-soft first-letter:uppercase">{smellInWords(profile, facets)}</p>
-        <Facts
-          facts={[
-            { term: 'Price', value: costPerKg ? pricePerKg(Number(costPerKg), currency) : 'not known' },
-            { term: 'Strength', value: `${Number(strength.toPrecision(2))} × linalool` },
-            { term: 'Natural', value: percent(natural) },
-          ]}
-        />
+        <p className="figures text-lead">{costPerKg ? pricePerKg(Number(costPerKg), currency) : 'Price not known'}</p>
+        <p className="figures">{Number(strength.toPrecision(2))} times as strong as linalool</p>
+        <p className="figures">{percent(natural)} natural</p>
       </div>
     </div>
   );

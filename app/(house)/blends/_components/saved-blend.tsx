@@ -14,7 +14,7 @@ export function SavedBlend({ blend }: { blend: SavedBlendView }) {
   const { facets, target, money, lines } = solved;
   return (
     <div className="tiles xl:grid-cols-[minmax(0,1.25fr)_minmax(0,1fr)]">
-      <div className="grid content-start gap-6 py-5">
+      <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-6 py-5">
         <Changes changes={changes} />
         <div className="grid gap-5 px-5 md:px-6">
           <Headline
@@ -45,7 +45,7 @@ export function SavedBlend({ blend }: { blend: SavedBlendView }) {
           }))}
         />
       </div>
-      <div className="grid content-start gap-px bg-grout">
+      <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-px bg-grout">
         <Tile title="Weigh it out">
           <WeighOut
             lines={lines.map(({ materialId, name, share }) => ({ id: materialId, name, share: Number(share) }))}
