@@ -84,7 +84,17 @@ export function checkVector(value: unknown, path: string, span: Span, length?: n
   if (length !== undefined && size !== length) {
     throw new EngineInputError(path, `${path} must have ${length} numbers, one per facet; it had ${size}.`);
   }
-  for (let index = 0; index < size; index++) checkNumber(vector[index], `${path}[${index}]`, span);
+  const fault = firstOutside(vector, size, span);
+  if (fault < size) checkNumber(vector[fault], `${path}[${fault}]`, span);
+  return size;
+}
+
+/** The first place that holds no number of the span. A library holds a million numbers: paths are written for faults only. */
+function firstOutside(vector: ArrayLike<unknown>, size: number, { min, max }: Span): number {
+  for (let index = 0; index < size; index++) {
+    const value = vector[index];
+    if (!(typeof value === 'number' && value >= min && value <= max)) return index;
+  }
   return size;
 }
 
