@@ -20,8 +20,14 @@ export function emptyNearest(rows: number, top: number, minSimilarity: number): 
   };
 }
 
+/** Offers two rows to each other. */
+export function offerBoth(nearest: Nearest, row: number, other: number, similarity: number): void {
+  if (similarity >= nearest.limits[row]!) offer(nearest, row, other, similarity);
+  if (similarity >= nearest.limits[other]!) offer(nearest, other, row, similarity);
+}
+
 /** Offers a partner to a row; it is kept if it belongs to the best so far. */
-export function offer(nearest: Nearest, row: number, partner: number, similarity: number): void {
+function offer(nearest: Nearest, row: number, partner: number, similarity: number): void {
   const { top, partners, similarities, counts, limits } = nearest;
   const start = row * top;
   const count = counts[row]!;

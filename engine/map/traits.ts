@@ -13,52 +13,58 @@ export interface Traits {
   traitCount: number;
 }
 
+type Visit = (trait: number, weight: number) => void;
+
 export function facetTraits(materials: readonly EngineMaterial[]): Traits {
-  return unitTraits(
-    materials,
-    (material) => Array.from(material.profile).map((intensity, facet) => [facet, intensity]),
-    materials[0]?.profile.length ?? 0,
-  );
+  const facets = materials[0]?.profile.length ?? 0;
+  return unitTraits(materials, facets, ({ profile }, visit) => {
+    for (let facet = 0; facet < facets; facet++) if (profile[facet] !== 0) visit(facet, profile[facet]!);
+  });
 }
 
 /** Constituents by their typical mass fraction, the worst case where that is not known. */
 export function constituentTraits(materials: readonly EngineMaterial[]): Traits {
   const names = materials.flatMap((material) => (material.constituents ?? []).map((constituent) => constituent.id));
   const numbers = new Map([...new Set(names)].sort().map((id, number) => [id, number]));
-  return unitTraits(
-    materials,
-    (material) => {
-      const held = material.constituents ?? [];
-      return held
-        .map(({ id, typical, max }): [number, number] => [numbers.get(id)!, typical ?? max])
-        .sort((a, b) => a[0] - b[0]);
-    },
-    numbers.size,
-  );
+  return unitTraits(materials, numbers.size, ({ constituents = [] }, visit) => {
+    const held = constituents.map(({ id, typical, max }) => ({ number: numbers.get(id)!, fraction: typical ?? max }));
+    held.sort((a, b) => a.number - b.number);
+    for (const { number, fraction } of held) if (fraction !== 0) visit(number, fraction);
+  });
 }
 
+/** Goes through the library twice, to count and to fill: a list per material would cost more than all comparisons. */
 function unitTraits(
   materials: readonly EngineMaterial[],
-  traitsOf: (material: EngineMaterial) => [trait: number, weight: number][],
   traitCount: number,
+  eachTrait: (material: EngineMaterial, visit: Visit) => void,
 ): Traits {
   const sorted = [...materials].sort((a, b) => (a.id < b.id ? -1 : 1));
-  const rows = sorted.map((material) => unit(traitsOf(material).filter(([, weight]) => weight !== 0)));
-  const starts = new Int32Array(rows.length + 1);
-  for (const [row, entries] of rows.entries()) starts[row + 1] = starts[row]! + entries.length;
-  const entries = rows.flat();
-  return {
-    ids: sorted.map((material) => material.id),
-    starts,
-    traits: Int32Array.from(entries, ([trait]) => trait),
-    weights: Float64Array.from(entries, ([, weight]) => weight),
-    traitCount,
-  };
+  const starts = new Int32Array(sorted.length + 1);
+  for (const [row, material] of sorted.entries()) {
+    let count = 0;
+    eachTrait(material, () => count++);
+    starts[row + 1] = starts[row]! + count;
+  }
+  const traits = new Int32Array(starts[sorted.length]!);
+  const weights = new Float64Array(traits.length);
+  for (const [row, material] of sorted.entries()) {
+    let entry = starts[row]!;
+    eachTrait(material, (trait, weight) => {
+      traits[entry] = trait;
+      weights[entry++] = weight;
+    });
+    toUnit(weights, starts[row]!, entry);
+  }
+  return { ids: sorted.map((material) => material.id), starts, traits, weights, traitCount };
 }
 
 /** Scaled by the largest first, so that no square of a tiny weight vanishes. */
-function unit(entries: [trait: number, weight: number][]): [trait: number, weight: number][] {
-  const largest = entries.reduce((most, [, weight]) => Math.max(most, Math.abs(weight)), 0);
-  const length = Math.sqrt(entries.reduce((sum, [, weight]) => sum + (weight / largest) ** 2, 0));
-  return entries.map(([trait, weight]) => [trait, weight / largest / length]);
+function toUnit(weights: Float64Array, from: number, to: number): void {
+  let largest = 0;
+  for (let entry = from; entry < to; entry++) largest = Math.max(largest, Math.abs(weights[entry]!));
+  let squares = 0;
+  for (let entry = from; entry < to; entry++) squares += (weights[entry]! / largest) ** 2;
+  const length = Math.sqrt(squares);
+  for (let entry = from; entry < to; entry++) weights[entry] = weights[entry]! / largest / length;
 }
