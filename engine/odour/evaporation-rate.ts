@@ -35,7 +35,7 @@ export function estimateEvaporation(evidence: {
     return { perHour: (molesPerS / BLOTTER.moles) * SECONDS_PER_HOUR, basis: 'vapour pressure' };
   }
   if (noteClass === undefined) return null;
-  if (!Object.hasOwn(HALF_LIVES, noteClass)) {
+  if (typeof noteClass !== 'string' || !Object.hasOwn(HALF_LIVES, noteClass)) {
     throw new EngineInputError('noteClass', `noteClass must be one of ${Object.keys(HALF_LIVES).join(', ')}.`);
   }
   return { perHour: Math.LN2 / HALF_LIVES[noteClass], basis: 'class' };

@@ -1,6 +1,7 @@
 import type { BlendProblem, BlendSolution, Run } from '../contract';
 import { checkWhole } from '../input/fields';
 import { checkProblem } from '../input/problem';
+import { checkRun } from '../input/run';
 import { Heap } from './heap';
 import { solveBlend } from './solve-blend';
 
@@ -29,6 +30,7 @@ interface Trial {
  */
 export function alternativeBlends(problem: BlendProblem, count: number, run?: Run): BlendSolution[] {
   checkProblem(problem);
+  checkRun(run);
   checkWhole(count, 'count', { min: 1, max: 100 });
   const found: BlendSolution[] = [];
   const queue = new Heap<Trial>();

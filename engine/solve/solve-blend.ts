@@ -1,5 +1,6 @@
 import type { BlendProblem, BlendSolution, Run } from '../contract';
 import { checkProblem } from '../input/problem';
+import { checkRun } from '../input/run';
 import { closest } from './closest';
 import { describe } from './describe';
 import { hasDiscreteRules } from './discrete';
@@ -18,6 +19,7 @@ import { prepare } from './prepare';
  */
 export function solveBlend(problem: BlendProblem, run?: Run): BlendSolution {
   checkProblem(problem);
+  checkRun(run);
   const prepared = prepare(problem);
   return hasDiscreteRules(problem) ? describeFewest(prepared, run) : describe(prepared, closest(prepared));
 }
