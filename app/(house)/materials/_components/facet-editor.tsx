@@ -65,7 +65,7 @@ export function FacetEditor({ draft, set, errors, facets }: PartProps & { facets
           value={draft.smell}
           error={errors.smell}
           onChange={(event) => set({ smell: event.target.value })}
-          className="latin [&_textarea]:font-serif"
+          className="[&_textarea]:font-serif [&_textarea]:text-lead [&_textarea]:italic"
         />
       </Field>
       <Field name="facets" className="grid gap-6 sm:col-span-2 md:grid-cols-[minmax(0,1fr)_17rem]">
