@@ -74,8 +74,11 @@ export class ActiveSet {
   private gradient = new Float64Array(64);
   private entries = new Float64Array(64);
   private right = new Float64Array(64);
-  private value: Float64Array;
-  private change: Float64Array;
+  private readonly value: Float64Array;
+  private readonly change: Float64Array;
+  private readonly touched: Int32Array;
+  private touchedCount = 0;
+  private readonly block = { part: 1, material: -1, row: -1 };
   /** 1 for a row of the working set, 2 for one left aside for now. */
   private readonly inRows: Uint8Array;
   private readonly ignored: number[] = [];
@@ -89,8 +92,9 @@ export class ActiveSet {
     this.facets = goal.linear ? 0 : prepared.facets;
     this.residual = new Float64Array(prepared.facets);
     this.along = new Float64Array(prepared.facets);
-    this.value = new Float64Array(prepared.general);
-    this.change = new Float64Array(prepared.general);
+    this.value = new Float64Array(prepared.rules.length);
+    this.change = new Float64Array(prepared.rules.length);
+    this.touched = new Int32Array(prepared.rules.length);
     this.inRows = new Uint8Array(prepared.rules.length);
     this.damping = goal.linear ? 1e-6 * (largest(goal.linear) || 1) : FLOOR * (largest(prepared.curvature) || 1);
     this.pricing = new Pricing(prepared, goal, this.damping);
@@ -282,14 +286,21 @@ export class ActiveSet {
     const { step } = this.factor;
     const size = this.materials.length;
     this.evaluateRows();
+    const { value, change, touched, touchedCount } = this;
     let reach = 1;
     for (let k = 0; k < size; k++) {
       if (u[k]! + step[k]! < 0) reach = Math.min(reach, (u[k]! + SLIP) / -step[k]!);
     }
-    this.eachRow((_, now, delta) => {
-      if (now + delta > SLIP && delta > 0) reach = Math.min(reach, Math.max(0, SLIP - now) / delta);
-    });
-    const block = { part: 1, material: -1, row: -1 };
+    for (let t = 0; t < touchedCount; t++) {
+      const r = touched[t]!;
+      if (change[r]! > 0 && value[r]! + change[r]! > SLIP) {
+        reach = Math.min(reach, Math.max(0, SLIP - value[r]!) / change[r]!);
+      }
+    }
+    const { block } = this;
+    block.part = 1;
+    block.material = -1;
+    block.row = -1;
     if (reach >= 1) return block;
     let strongest = 0;
     for (let k = 0; k < size; k++) {
@@ -300,64 +311,60 @@ export class ActiveSet {
         block.part = Math.max(0, u[k]! / fall);
       }
     }
-    this.eachRow((r, now, delta) => {
-      if (now + delta > SLIP && delta > strongest && -now <= reach * delta) {
-        strongest = delta;
+    for (let t = 0; t < touchedCount; t++) {
+      const r = touched[t]!;
+      const rise = change[r]!;
+      if (rise > strongest && value[r]! + rise > SLIP && -value[r]! <= reach * rise) {
+        strongest = rise;
         block.material = -1;
         block.row = r;
-        block.part = Math.max(0, -now / delta);
+        block.part = Math.max(0, -value[r]! / rise);
       }
-    });
+    }
     block.part = Math.min(1, block.part);
     return block;
   }
 
-  /** Every row outside the working set that the materials in use touch: its value, and its change along the step. */
-  private eachRow(visit: (row: number, value: number, change: number) => void): void {
-    const { prepared, value, change, inRows } = this;
-    const left = this.goal.left ?? prepared.asleep;
-    for (let r = 0; r < prepared.general; r++) {
-      if (inRows[r] === 0 && left[r] === 0) visit(r, value[r]!, change[r]!);
-    }
-    for (const { row, now, delta } of this.own) {
-      if (inRows[row] === 0 && left[row] === 0) visit(row, now, delta);
-    }
-  }
-
-  private own: { row: number; now: number; delta: number }[] = [];
-
+  /**
+   * The value, and the change along the step, of every row outside the working set that the materials in use can break:
+   * all general rules, and the upper limits of the materials themselves.
+   */
   private evaluateRows(): void {
-    const { prepared, value, change } = this;
+    const { prepared, value, change, touched, zeta, u, inRows } = this;
     const { step } = this.factor;
+    const { base, start, row, entry, general } = prepared;
+    const left = this.goal.left ?? prepared.asleep;
     let mass = 0;
     let massChange = 0;
     for (let k = 0; k < this.materials.length; k++) {
-      mass += this.gramsOf(k);
-      massChange += this.zeta[k]! * step[k]!;
+      mass += zeta[k]! * u[k]!;
+      massChange += zeta[k]! * step[k]!;
     }
-    this.own.length = 0;
-    for (let r = 0; r < prepared.general; r++) {
-      const scale = this.rowScale(r) * prepared.base[r]!;
-      value[r] = scale * mass;
-      change[r] = scale * massChange;
+    this.touchedCount = 0;
+    for (let r = 0; r < general; r++) {
+      value[r] = base[r]! * mass;
+      change[r] = base[r]! * massChange;
+      if (inRows[r] === 0 && left[r] === 0) touched[this.touchedCount++] = r;
     }
     for (let k = 0; k < this.materials.length; k++) {
       const i = this.materials[k]!;
-      for (let at = prepared.start[i]!; at < prepared.start[i + 1]!; at++) {
-        const r = prepared.row[at]!;
-        const weight = this.zeta[k]! * prepared.entry[at]! * this.rowScale(r);
-        if (r < prepared.general) {
-          value[r] = value[r]! + weight * this.u[k]!;
-          change[r] = change[r]! + weight * step[k]!;
-        } else {
-          const base = prepared.base[r]! * this.rowScale(r);
-          this.own.push({
-            row: r,
-            now: weight * this.u[k]! + base * mass,
-            delta: weight * step[k]! + base * massChange,
-          });
+      for (let at = start[i]!; at < start[i + 1]!; at++) {
+        const r = row[at]!;
+        if (r >= general) {
+          value[r] = base[r]! * mass;
+          change[r] = base[r]! * massChange;
+          if (inRows[r] === 0 && left[r] === 0) touched[this.touchedCount++] = r;
         }
+        const weight = zeta[k]! * entry[at]!;
+        value[r] = value[r]! + weight * u[k]!;
+        change[r] = change[r]! + weight * step[k]!;
       }
+    }
+    for (let t = 0; t < this.touchedCount; t++) {
+      const r = touched[t]!;
+      const scale = this.rowScale(r);
+      value[r] = value[r]! * scale;
+      change[r] = change[r]! * scale;
     }
   }
 
@@ -444,7 +451,7 @@ export class ActiveSet {
     if (this.rows.length + 2 > materials.length) return false;
     for (let k = 0; k < materials.length; k++) this.entries[k] = this.coefficient(r, materials[k]!, this.zeta[k]!);
     factor.addRow(this.entries);
-    if (factor.dependentRow(DEPENDENCE) >= 0) {
+    if (factor.dependentRow(DEPENDENCE, factor.rows - 1) >= 0) {
       factor.removeRow(factor.rows - 1);
       return false;
     }

@@ -97,18 +97,22 @@ function pricesOf(
 }
 
 function onlyMaterial(rule: Rule): number {
-  return rule.amounts instanceof Float64Array ? -1 : rule.amounts.at[0]!;
+  return typeof rule.counts === 'object' && 'members' in rule.counts ? rule.counts.members[0]! : -1;
 }
 
 /** What each rule limits, of this blend: per gram, or per unit of impact. */
 export function ruleValues(prepared: Prepared, { materials, grams }: Point, mass: number): Float64Array {
-  const amounts = new Map(materials.map((i, k) => [i, grams[k]!]));
-  return Float64Array.from(prepared.rules, (rule) => {
-    let sum = 0;
-    if (rule.amounts instanceof Float64Array) for (const [i, z] of amounts) sum += rule.amounts[i]! * z;
-    else for (const i of rule.amounts.at) sum += rule.amounts.amount * (amounts.get(i) ?? 0);
-    return rule.per === 'mass' ? sum / mass : sum;
-  });
+  const { rules, start, row, entry, cost } = prepared;
+  const values = new Float64Array(rules.length);
+  for (let k = 0; k < materials.length; k++) {
+    const i = materials[k]!;
+    for (let at = start[i]!; at < start[i + 1]!; at++) {
+      const rule = rules[row[at]!]!;
+      const amount = rule.counts === 'cost' ? cost[i]! : Math.abs(entry[at]!) * rule.scale;
+      values[row[at]!]! += (amount * grams[k]!) / (rule.per === 'mass' ? mass : 1);
+    }
+  }
+  return values;
 }
 
 function warningsOf(lines: readonly { impact: number }[]): string[] {

@@ -4,7 +4,8 @@ import { startFrom } from './closest';
 import { forcedOut } from './forced-out';
 import { phaseOne } from './phase-one';
 import { type Prepared, prepare } from './prepare';
-import { amountsOf, type Rule, withLimit } from './rules';
+import { amountsOf } from './rows';
+import { withLimit } from './rules';
 
 export interface BestLimit {
   value: number;
@@ -22,7 +23,7 @@ export function bestLimit(prepared: Prepared, r: number, wanted: 'least' | 'most
   left[r] = 1;
   const start = phaseOne(prepared, { left });
   if (!start.feasible) return null;
-  const amounts = amountsOf(rule, prepared.count);
+  const amounts = amountsOf(prepared, r);
   const linear = amounts.map((amount) => (wanted === 'least' ? amount : -amount));
   const normal = rule.per === 'mass' ? new Float64Array(prepared.count).fill(1) : prepared.strength;
   const set = new ActiveSet(prepared, { normal, linear, left });
@@ -43,13 +44,14 @@ const MARGINS = [0, 1e-9, 1e-7, 1e-5, 1e-3];
 const MARGINS_UNREACHED = [1e-4, 1e-2];
 
 /** The limit nearest to the best value for which solving finds a blend, or null. */
-export function workingLimit(problem: BlendProblem, rule: Rule, { value, reached }: BestLimit): number | null {
+export function workingLimit(prepared: Prepared, r: number, { value, reached }: BestLimit): number | null {
+  const rule = prepared.rules[r]!;
   const up = rule.kind === 'max' || (rule.kind === 'exact' && value < rule.limit);
-  const size = Math.max(value, 1e-3 * amountsOf(rule, 0).reduce((most, amount) => Math.max(most, amount), 0));
+  const size = Math.max(value, 1e-3 * amountsOf(prepared, r).reduce((most, amount) => Math.max(most, amount), 0));
   for (const margin of reached ? MARGINS : MARGINS_UNREACHED) {
     const past = Math.max(0, up ? value + margin * size : value * (1 - margin));
     const to = rule.isFraction ? Math.min(1, past) : past;
-    if (hasBlend(withLimit(problem, rule, to))) return to;
+    if (hasBlend(withLimit(prepared.problem, rule, to))) return to;
   }
   return null;
 }

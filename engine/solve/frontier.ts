@@ -7,7 +7,8 @@ import { bestLimit, workingLimit } from './best-limit';
 import { closest } from './closest';
 import { describe } from './describe';
 import { hasDiscreteRules } from './discrete';
-import { prepare, renewLimit } from './prepare';
+import { prepare } from './prepare';
+import { renewLimit } from './rows';
 import { solveBlend } from './solve-blend';
 
 /** More points than anybody could tell apart on a screen are a slip of the caller. */
@@ -71,7 +72,7 @@ function evenCeilings(problem: BlendProblem, field: 'budgetPerKg' | 'costPerImpa
   if (least === null) return [];
   const free = solveBlend({ ...problem, [field]: undefined });
   const most = (field === 'budgetPerKg' ? free.costPerKg : free.costPerImpact) * (1 + LOOSE);
-  const lowest = workingLimit(prepared.problem, prepared.rules[r]!, least) ?? most;
+  const lowest = workingLimit(prepared, r, least) ?? most;
   if (count === 1 || !(most > lowest)) return count === 1 ? [most] : Array.from({ length: count }, () => most);
   return Array.from({ length: count }, (_, index) => lowest + ((most - lowest) * index) / (count - 1));
 }

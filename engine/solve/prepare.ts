@@ -1,6 +1,8 @@
 import type { BlendProblem, EngineMaterial } from '../contract';
 import { exponential } from '../portable/exponential';
-import { type Rule, rulesOf } from './rules';
+import { rowsByMaterial } from './rows';
+import type { Rule } from './rules';
+import { product } from './triangle';
 
 /**
  * A blend problem as flat arrays, its materials sorted by id: what the hot loops work on.
@@ -50,22 +52,28 @@ export function prepare(problem: BlendProblem): Prepared {
     target: new Float64Array(facets),
     variance: new Float64Array(materials.length),
     curvature: new Float64Array(materials.length),
-    strength: Float64Array.from(materials, (material) => material.strength),
-    cost: Float64Array.from(materials, (material) => material.costPerKg),
+    strength: new Float64Array(materials.length),
+    cost: new Float64Array(materials.length),
     totalWeight: 0,
     targetSize: 0,
     ...rowsByMaterial(problem, materials),
   };
+  for (let i = 0; i < materials.length; i++) {
+    prepared.strength[i] = materials[i]!.strength;
+    prepared.cost[i] = materials[i]!.costPerKg;
+  }
   for (const [index, stage] of stages.entries()) addStage(prepared, stage, index);
   for (let i = 0; i < materials.length; i++) {
-    let sum = prepared.variance[i]!;
-    for (let f = i * facets; f < (i + 1) * facets; f++) sum += prepared.vectors[f]! ** 2;
-    prepared.curvature[i] = sum;
+    prepared.curvature[i] =
+      prepared.variance[i]! + product(prepared.vectors, i * facets, prepared.vectors, i * facets, facets);
   }
   return prepared;
 }
 
 function sortedById(candidates: readonly EngineMaterial[]): EngineMaterial[] {
+  let sorted = true;
+  for (let i = 1; i < candidates.length && sorted; i++) sorted = candidates[i - 1]!.id < candidates[i]!.id;
+  if (sorted) return [...candidates];
   return [...candidates].sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0));
 }
 
@@ -106,83 +114,4 @@ function weightedSquares(values: ArrayLike<number>, weights: Float64Array): numb
   let sum = 0;
   for (let f = 0; f < weights.length; f++) sum += weights[f]! * values[f]! * values[f]!;
   return sum;
-}
-
-/** A coefficient this near to 0, in roundings of its two parts, is 0: a material that meets a limit exactly. */
-const SAME = 4 * Number.EPSILON;
-
-function rowsByMaterial(problem: BlendProblem, materials: readonly EngineMaterial[]) {
-  const { rules, general } = rulesOf(problem, materials);
-  const strengthScale = middleStrength(materials);
-  for (const rule of rules) if (rule.per === 'impact') rule.scale *= strengthScale;
-  const base = Float64Array.from(rules, baseOf);
-  const sizes = new Int32Array(materials.length + 1);
-  eachEntry(rules, materials, (i) => sizes[i + 1]!++);
-  const start = sizes;
-  for (let i = 0; i < materials.length; i++) start[i + 1]! += start[i]!;
-  const next = start.slice(0, materials.length);
-  const row = new Int32Array(start[materials.length]!);
-  const entry = new Float64Array(row.length);
-  eachEntry(rules, materials, (i, r, value) => {
-    const at = next[i]!++;
-    row[at] = r;
-    entry[at] = Math.abs(value + base[r]!) <= SAME ? -base[r]! : value;
-  });
-  const asleep = Uint8Array.from(rules, ({ doseOf }) => (doseOf === undefined ? 0 : 1));
-  return { rules, general, base, start, row, entry, asleep, strengthScale };
-}
-
-/** Gives a price rule another ceiling above 0, in place: the rows of a frontier differ in nothing else. */
-export function renewLimit(prepared: Prepared, name: 'budgetPerKg' | 'costPerImpact', limit: number): void {
-  const { rules, base, start, row, entry, cost, strength, strengthScale } = prepared;
-  const r = rules.findIndex(({ rule }) => rule === name);
-  const rule = rules[r]!;
-  rule.limit = limit;
-  rule.scale = rule.per === 'impact' ? limit * strengthScale : limit;
-  for (let i = 0; i < prepared.count; i++) {
-    for (let at = start[i]!; at < start[i + 1]!; at++) {
-      if (row[at] !== r) continue;
-      const value = cost[i]! / rule.scale;
-      if (rule.per === 'impact') entry[at] = impactPrice(value, strength[i]! / strengthScale);
-      else entry[at] = Math.abs(value + base[r]!) <= SAME ? -base[r]! : value;
-    }
-  }
-}
-
-function baseOf(rule: Rule): number {
-  if (rule.limit === 0 || rule.per === 'impact') return 0;
-  return rule.kind === 'min' ? 1 : -1;
-}
-
-function eachEntry(
-  rules: readonly Rule[],
-  materials: readonly EngineMaterial[],
-  visit: (material: number, rule: number, value: number) => void,
-): void {
-  for (const [r, rule] of rules.entries()) {
-    const factor = (rule.kind === 'min' ? -1 : 1) / rule.scale;
-    if (!(rule.amounts instanceof Float64Array)) {
-      for (const i of rule.amounts.at) visit(i, r, rule.amounts.amount * factor);
-      continue;
-    }
-    const perImpact = rule.per === 'impact' && rule.limit > 0;
-    const unit = perImpact ? rule.scale / rule.limit : 1;
-    for (let i = 0; i < materials.length; i++) {
-      const value = perImpact
-        ? impactPrice(rule.amounts[i]! * factor, materials[i]!.strength / unit)
-        : rule.amounts[i]! * factor;
-      if (value !== 0 || perImpact) visit(i, r, value);
-    }
-  }
-}
-
-function impactPrice(costPerCeiling: number, strength: number): number {
-  const value = costPerCeiling - strength;
-  return Math.abs(value) <= SAME * strength ? 0 : value;
-}
-
-/** A strength in the middle of those there are: the price at equal strength is a row in strengths, and needs a scale. */
-function middleStrength(materials: readonly EngineMaterial[]): number {
-  const strengths = materials.map((material) => material.strength).filter((strength) => strength > 0);
-  return strengths.sort((a, b) => a - b)[strengths.length >> 1]!;
 }

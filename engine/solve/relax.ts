@@ -14,7 +14,7 @@ export function relaxations(prepared: Prepared, conflict: readonly string[]): Re
   for (const [r, rule] of prepared.rules.entries()) {
     if (!conflict.includes(rule.rule) || rule.rule.startsWith('required:')) continue;
     for (const value of candidatesFor(prepared, r)) {
-      const to = workingLimit(prepared.problem, rule, value);
+      const to = workingLimit(prepared, r, value);
       if (to === null) continue;
       const side = rule.kind === 'exact' ? {} : { side: rule.side! };
       found.push({ rule: rule.rule, ...side, from: rule.limit, to });

@@ -16,11 +16,18 @@ export interface Rule {
   isFraction: boolean;
   /** The row is the contract's row divided by this: the limit, or 1 where the limit is 0. */
   scale: number;
-  /** Amount per gram of each material that has any: a dense list, or the materials named. */
-  amounts: Float64Array | { at: number[]; amount: number };
+  /** What is counted per gram: a property, constituents by their factors, or the mass of some materials itself. */
+  counts: Counted;
   /** The material whose smallest dose this is: a rule only while a search takes it to be used. */
   doseOf?: number;
 }
+
+export type Counted =
+  | 'cost'
+  | 'strength'
+  | 'natural'
+  | { terms: readonly { constituentId: string; factor: number }[] }
+  | { members: readonly number[] };
 
 /** A used material that is `required` weighs at least this, unless a smallest dose says more. */
 export const LEAST_REQUIRED_SHARE = 1e-4;
@@ -35,91 +42,52 @@ export function rulesOf(
   problem: BlendProblem,
   materials: readonly EngineMaterial[],
 ): { rules: Rule[]; general: number } {
-  const place = new Map(materials.map((material, index) => [material.id, index]));
-  const dense = (amount: (material: EngineMaterial) => number) => Float64Array.from(materials, amount);
+  const place = problem.groups || problem.kept || problem.required ? placesOf(materials) : new Map<string, number>();
   const rules: Rule[] = [];
-  const add = (
-    rule: string,
-    kind: Rule['kind'],
-    limit: number,
-    amounts: Rule['amounts'],
-    per: Rule['per'] = 'mass',
-  ) => {
+  const add = (rule: string, kind: Rule['kind'], limit: number, counts: Counted) => {
     if (kind === 'min' && limit === 0) return;
+    const per = rule === 'costPerImpact' ? 'impact' : 'mass';
     const scale = limit > 0 ? limit : 1;
-    const isFraction = /^(minNatural$|group:|kept:|required:|share:)/.test(rule);
-    rules.push({ rule, side: kind === 'min' ? 'min' : 'max', kind, per, limit, isFraction, scale, amounts });
+    const isFraction = typeof counts === 'object' ? 'members' in counts : counts === 'natural';
+    rules.push({ rule, side: kind === 'min' ? 'min' : 'max', kind, per, limit, isFraction, scale, counts });
   };
   const { budgetPerKg, costPerImpact, minStrength = 0, minNatural = 0, limits = [], groups = [], kept = [] } = problem;
-  if (budgetPerKg !== undefined)
-    add(
-      'budgetPerKg',
-      'max',
-      budgetPerKg,
-      dense((m) => m.costPerKg),
-    );
-  if (costPerImpact !== undefined)
-    add(
-      'costPerImpact',
-      'max',
-      costPerImpact,
-      dense((m) => m.costPerKg),
-      'impact',
-    );
-  add(
-    'minStrength',
-    'min',
-    minStrength,
-    dense((m) => m.strength),
-  );
-  add(
-    'minNatural',
-    'min',
-    minNatural,
-    dense((m) => m.natural ?? 0),
-  );
-  for (const limit of limits) add(`limit:${limit.id}`, 'max', limit.max, constituentSum(limit.terms, materials));
+  if (budgetPerKg !== undefined) add('budgetPerKg', 'max', budgetPerKg, 'cost');
+  if (costPerImpact !== undefined) add('costPerImpact', 'max', costPerImpact, 'cost');
+  add('minStrength', 'min', minStrength, 'strength');
+  add('minNatural', 'min', minNatural, 'natural');
+  for (const limit of limits) add(`limit:${limit.id}`, 'max', limit.max, { terms: limit.terms });
   for (const { id, members, min = 0, max = 1 } of groups) {
-    const amounts = { at: members.map((member) => place.get(member)!), amount: 1 };
-    add(`group:${id}`, 'min', min, amounts);
-    if (max < 1) add(`group:${id}`, 'max', max, amounts);
+    const counts = { members: members.map((member) => place.get(member)!) };
+    add(`group:${id}`, 'min', min, counts);
+    if (max < 1) add(`group:${id}`, 'max', max, counts);
   }
-  for (const { id, share } of kept) add(`kept:${id}`, 'exact', share, { at: [place.get(id)!], amount: 1 });
+  for (const { id, share } of kept) add(`kept:${id}`, 'exact', share, { members: [place.get(id)!] });
   for (const id of problem.required ?? []) {
     const index = place.get(id)!;
     const least = Math.max(materials[index]!.minShare ?? 0, problem.minDose ?? LEAST_REQUIRED_SHARE);
-    add(`required:${id}`, 'min', least, { at: [index], amount: 1 });
+    add(`required:${id}`, 'min', least, { members: [index] });
   }
-  for (const [index, { id, minShare = 0 }] of materials.entries()) {
-    if (minShare > 0) add(`share:${id}`, 'min', minShare, { at: [index], amount: 1 });
+  for (let index = 0; index < materials.length; index++) {
+    const { id, minShare = 0 } = materials[index]!;
+    if (minShare > 0) add(`share:${id}`, 'min', minShare, { members: [index] });
   }
   const keptIds = new Set(kept.map((line) => line.id));
-  for (const [index, { id }] of materials.entries()) {
-    if (!problem.minDose || keptIds.has(id)) continue;
-    add('minDose', 'min', problem.minDose, { at: [index], amount: 1 });
+  for (let index = 0; index < materials.length && problem.minDose; index++) {
+    if (keptIds.has(materials[index]!.id)) continue;
+    add('minDose', 'min', problem.minDose, { members: [index] });
     rules[rules.length - 1]!.doseOf = index;
   }
   const general = rules.length;
-  for (const [index, { id, maxShare = 1 }] of materials.entries()) {
-    if (maxShare < 1) add(`share:${id}`, 'max', maxShare, { at: [index], amount: 1 });
+  for (let index = 0; index < materials.length; index++) {
+    const { id, maxShare = 1 } = materials[index]!;
+    if (maxShare < 1) add(`share:${id}`, 'max', maxShare, { members: [index] });
   }
   return { rules, general };
 }
 
-/** sum_j g_j q_ij of every material: what the limit counts, in the worst case of each composition. */
-function constituentSum(
-  terms: readonly { constituentId: string; factor: number }[],
-  materials: readonly EngineMaterial[],
-): Float64Array {
-  const factors = new Map<string, number>();
-  for (const { constituentId, factor } of terms) {
-    factors.set(constituentId, (factors.get(constituentId) ?? 0) + factor);
-  }
-  return Float64Array.from(materials, ({ constituents = [] }) => {
-    let sum = 0;
-    for (const { id, max } of constituents) sum += (factors.get(id) ?? 0) * max;
-    return sum;
-  });
+function placesOf(materials: readonly EngineMaterial[]): Map<string, number> {
+  return new Map(materials.map((material, index) => [material.id, index]));
 }
 
 /** The problem with one rule's limit at another value. */
@@ -134,12 +102,4 @@ export function withLimit(problem: BlendProblem, { rule, kind }: Rule, to: numbe
     return { ...problem, candidates: swap(problem.candidates, kind === 'min' ? { minShare: to } : { maxShare: to }) };
   }
   return { ...problem, [rule]: to };
-}
-
-/** A rule's amounts as one list; `count` may be 0 where only the values matter and not whose they are. */
-export function amountsOf({ amounts }: Rule, count: number): Float64Array {
-  if (amounts instanceof Float64Array) return amounts;
-  const list = new Float64Array(Math.max(count, 1 + Math.max(-1, ...amounts.at)));
-  for (const i of amounts.at) list[i] = amounts.amount;
-  return list;
 }

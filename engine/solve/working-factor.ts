@@ -103,12 +103,13 @@ export class WorkingFactor {
   }
 
   /** The first row that depends on the ones before it to within `dependence` of its length, or -1. */
-  dependentRow(dependence: number): number {
+  dependentRow(dependence: number, from = 0): number {
     this.factor();
-    for (let r = 0; r < this.rows; r++) {
-      const at = r * this.capacity;
-      const length = Math.sqrt(product(this.y, at, this.y, at, this.size));
-      if (!(Math.abs(this.diagonal[r]!) > dependence * length)) return r;
+    const { q, diagonal, capacity } = this;
+    for (let r = from; r < this.rows; r++) {
+      const own = diagonal[r]! * diagonal[r]!;
+      const length = Math.sqrt(own + product(q, r * capacity, q, r * capacity, r)); // of R's column, and so of Y's
+      if (!(Math.abs(diagonal[r]!) > dependence * length)) return r;
     }
     return -1;
   }
