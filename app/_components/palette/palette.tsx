@@ -2,7 +2,7 @@
 
 import dynamic from 'next/dynamic';
 import { useEffect, useMemo, useState } from 'react';
-import { ENTRIES } from '../shell/entries';
+import { Drawing, ENTRIES } from '../shell/entries';
 import { classNames } from '../ui/class-names';
 import { useHouseSources } from './house-sources';
 import { type PaletteSource, usePaletteSource } from './sources';
@@ -37,6 +37,22 @@ export function Palette({ allowed, actions }: { allowed: readonly string[]; acti
     };
   }, []);
   return wanted ? <PalettePanel open={open} onOpenChange={setOpen} /> : null;
+}
+
+/** The same on a phone, as an entry of the bar below. */
+export function PaletteBarButton() {
+  return (
+    <button
+      type="button"
+      onClick={openPalette}
+      className="grid min-h-14 flex-1 place-content-center justify-items-center gap-0.5 text-note text-ink-soft"
+    >
+      <Drawing>
+        <path d="M9 14a5 5 0 1 1 .01 0ZM12.5 12.5 17 17" />
+      </Drawing>
+      Find
+    </button>
+  );
 }
 
 export function PaletteButton({ className }: { className?: string }) {

@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
 import { Wordmark } from '../brand/wordmark';
-import { Palette, PaletteButton } from '../palette/palette';
+import { Palette, PaletteBarButton, PaletteButton } from '../palette/palette';
 import { type Person, PersonMenu } from './person-menu';
 import { BarLinks, RailLinks } from './rail-links';
 
@@ -47,6 +47,7 @@ export function HouseShell({ person, allowed, actions, children }: HouseShellPro
         data-print="no"
       >
         <BarLinks allowed={allowed} />
+        <PaletteBarButton />
         <PersonMenu person={person} placement="bar" />
       </nav>
       <Palette allowed={allowed} actions={actions} />
