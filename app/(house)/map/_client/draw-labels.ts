@@ -1,5 +1,5 @@
 import { stripWidth } from './draw-strip';
-import { type Emphasis, labelOrder } from './emphasis';
+import type { Emphasis } from './emphasis';
 import type { MapView } from './model';
 import { type Box, placeLabels, type WantedLabel } from './place-labels';
 import type { GraphNode } from './use-glide';
@@ -9,6 +9,8 @@ export interface LabelScene {
   view: MapView;
   nodes: ReadonlyMap<string, GraphNode>;
   emphasis: Emphasis;
+  /** Ids in the order in which they deserve a label; worked out once, not in every frame. */
+  order: readonly string[];
   inks: GraphInks;
   width: number;
   height: number;
@@ -60,9 +62,9 @@ interface Shown {
 
 /** The strips on the screen, in px, in the order in which they deserve a label. */
 function inSight({ a, e, f }: DOMMatrix, ratio: number, scene: LabelScene): Shown[] {
-  const { view, nodes, emphasis, width, height, length } = scene;
+  const { view, nodes, order, width, height, length } = scene;
   const half = { halfWidth: stripWidth(length) / 2, halfHeight: length / 2 };
-  return labelOrder(view, emphasis).flatMap((id) => {
+  return order.flatMap((id) => {
     const node = nodes.get(id);
     if (!node) return [];
     const [x, y] = [(a * node.x + e) / ratio, (a * node.y + f) / ratio];

@@ -6,7 +6,7 @@ import type { MapPoint } from '@/engine/map/map-layout';
 import type { FacetView } from '@/lib/shared/facet';
 import { drawLabels } from '../_client/draw-labels';
 import { type DrawnStrip, drawnStrip, drawStrip, stripWidth } from '../_client/draw-strip';
-import type { Emphasis } from '../_client/emphasis';
+import { type Emphasis, labelOrder } from '../_client/emphasis';
 import type { MapView } from '../_client/model';
 import { type GraphNode, useGlide } from '../_client/use-glide';
 import { type GraphInks, thinner } from '../_client/use-inks';
@@ -58,6 +58,7 @@ export default function GraphCanvas(props: GraphCanvasProps) {
     return { nodes: shown as Node[], links };
   }, [view, nodes]);
 
+  const order = useMemo(() => labelOrder(view, emphasis), [view, emphasis]);
   const showAll = useCallback((ms: number) => graph.current?.zoomToFit(ms, MARGIN_PX), []);
   // biome-ignore lint/correctness/useExhaustiveDependencies: once for each layout, when its nodes have their places
   useEffect(() => {
@@ -127,7 +128,7 @@ export default function GraphCanvas(props: GraphCanvasProps) {
       linkColor={(link) => colours[strengthOf(link as Link)]}
       linkWidth={(link) => (strengthOf(link as Link) === 'pointed' ? 1.6 : 1)}
       onRenderFramePost={(ctx, zoom) =>
-        drawLabels(ctx, { view, nodes, emphasis, inks, width, height, length: lengthPx(zoom, count) })
+        drawLabels(ctx, { view, order, nodes, emphasis, inks, width, height, length: lengthPx(zoom, count) })
       }
       onNodeHover={(node) => {
         const at = node ? graph.current?.graph2ScreenCoords(node.x ?? 0, node.y ?? 0) : undefined;
