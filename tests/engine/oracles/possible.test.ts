@@ -3,7 +3,7 @@ import { solveBlend } from '@/engine/solve/solve-blend';
 import { generatedProblem } from '@/tests/support/arbitraries/blend-problem';
 import { highsFindsBlend } from '@/tests/support/oracles/highs';
 
-it("agrees with HiGHS' linear programmes on what is possible", { timeout: 120_000 }, () => {
+it("agrees with HiGHS' linear programmes on what is possible", { timeout: 240_000 }, () => {
   const wrong: string[] = [];
   for (let seed = 0; seed < 300; seed++) {
     const { problem, feasible, story } = generatedProblem(20_000 + seed, { candidates: [10, 60], infeasible: 0.5 });
