@@ -139,7 +139,7 @@ describe('writing a material', () => {
     await page.getByLabel('Natural share').fill('0');
     await page.getByRole('searchbox', { name: 'Search facets' }).fill('rosy');
     const intensity = page.getByRole('textbox', { name: /Rosy, intensity/ });
-    await intensity.fill('7.5');
+    await intensity.fill('7,5');
     await intensity.blur();
     await page.getByRole('button', { name: 'Enter material' }).click();
     await page.getByRole('heading', { level: 1, name: 'Clean rose alcohol' }).waitFor();
