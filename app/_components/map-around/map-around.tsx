@@ -23,7 +23,7 @@ export interface MapAroundProps {
   hrefOf?: (id: string) => string;
 }
 
-const percent = new Intl.NumberFormat('en-GB', { style: 'percent', maximumSignificantDigits: 2 });
+const twoDigits = new Intl.NumberFormat('en-GB', { maximumSignificantDigits: 2 });
 const MIDDLE: Place = { x: 50, y: 50 };
 
 /**
@@ -60,7 +60,7 @@ export function MapAround({ facets, target, nodes, links = [], hrefOf = material
                 {node.name}
               </Link>
               <span className="figures bg-paper px-1 text-note text-ink-soft">
-                {percent.format(node.impact)} <span className="sr-only">of the impact</span>
+                {twoDigits.format(100 * node.impact)}&nbsp;% <span className="sr-only">of the impact</span>
               </span>
             </At>
           </li>
