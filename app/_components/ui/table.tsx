@@ -2,11 +2,14 @@ import Link from 'next/link';
 import type { ComponentProps, ReactNode } from 'react';
 import { classNames } from './class-names';
 
-/** Ruled like a ledger: hairlines between rows, ink under the heads, figures in columns. Scrolls sideways within itself. */
+/**
+ * Ruled like a ledger: hairlines between rows, ink under the heads, figures in columns. Scrolls sideways within itself;
+ * `relative` keeps words for screen readers alone, which are placed absolutely, from widening the page.
+ */
 export function Table({ label, className, children, ...rest }: ComponentProps<'table'> & { label: string }) {
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must be scrollable by keys
-    <section aria-label={label} tabIndex={0} className="overflow-x-auto focus-visible:outline-offset-[-2px]">
+    <section aria-label={label} tabIndex={0} className="relative overflow-x-auto focus-visible:outline-offset-[-2px]">
       <table className={classNames('w-full border-collapse text-left', className)} {...rest}>
         {children}
       </table>
