@@ -108,11 +108,13 @@ function heldBackWithoutPrices({ reliefs }: BlendAnswer): string[] {
   return reliefs.length > 0 && shown.length === 0 ? [] : heldBackBy(shown);
 }
 
+const day = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', year: 'numeric', timeZone: 'UTC' });
+
 /** "100 g at 25.00 EUR from a supplier, its grade, of a day". */
 export function offerInWords({ offer }: Pick<Candidate, 'offer'>): string | null {
   if (!offer) return null;
   const pack = new Decimal(offer.packAmount).toFixed();
-  return `${pack} ${offer.packUnit} at ${new Decimal(offer.price).toFixed(2)} ${offer.currency}, ${offer.supplier}, ${offer.grade}, ${offer.offeredOn}`;
+  return `${pack} ${offer.packUnit} at ${new Decimal(offer.price).toFixed(2)} ${offer.currency}, ${offer.supplier}, ${offer.grade}, ${day.format(new Date(offer.offeredOn))}`;
 }
 
 /** JSON has no infinity. */

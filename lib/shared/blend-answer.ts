@@ -99,5 +99,9 @@ export function proofInWords(solution: BlendSolution, totalWeight: number, certi
   const within = gap < NOTHING ? 'a millionth of a point' : `${gap.toPrecision(1)} points`;
   if (solution.status === 'stopped')
     return `Not proven to be the closest: no blend within these rules comes closer than ${pointsOf(closest)} points, the spread between noses counted in, and this one is at ${pointsOf(solution.expectedDistance)}.`;
-  return `Proven: no blend of these materials within these rules comes closer than ${pointsOf(closest)} points, the spread between noses counted in; this one is within ${within} of that.`;
+  const known =
+    certificate && !certificate.boundProven
+      ? 'Found by looking through all of them, not checked a second time'
+      : 'Proven';
+  return `${known}: no blend of these materials within these rules comes closer than ${pointsOf(closest)} points, the spread between noses counted in; this one is within ${within} of that.`;
 }

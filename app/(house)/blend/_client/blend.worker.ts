@@ -1,8 +1,8 @@
-import { certify, EngineInputError, solveBlend } from '@/engine';
+import { alternativeBlends, certify, EngineInputError, solveBlend } from '@/engine';
 import { type BlendRequest, RequestFault } from '@/lib/shared/blend-input';
 import { type BlendInputs, buildBlendProblem } from '@/lib/shared/blend-problem';
 import { frontierSteps } from './frontier-steps';
-import type { FromWorker, Solved, ToWorker } from './messages';
+import type { FromWorker, OtherBlend, Solved, ToWorker } from './messages';
 
 /** Solves beside the screen, so that a slider never waits for an answer. It knows only what `load` brought it. */
 let inputs: BlendInputs | null = null;
@@ -20,9 +20,9 @@ scope.onmessage = ({ data }) => {
 function answer(question: Exclude<ToWorker, { kind: 'load' }>, known: BlendInputs): FromWorker {
   const { turn, request } = question;
   try {
-    return question.kind === 'solve'
-      ? { kind: 'solved', turn, solved: solve(request, known) }
-      : { kind: 'frontier', turn, steps: frontierSteps(request, known) };
+    if (question.kind === 'solve') return { kind: 'solved', turn, solved: solve(question, known) };
+    if (question.kind === 'others') return { kind: 'others', turn, blends: others(question, known) };
+    return { kind: 'frontier', turn, steps: frontierSteps(request, known) };
   } catch (error) {
     if (error instanceof RequestFault) return { kind: 'fault', turn, fields: error.fields };
     if (error instanceof EngineInputError) return { kind: 'fault', turn, fields: { [error.path]: error.message } };
@@ -30,8 +30,30 @@ function answer(question: Exclude<ToWorker, { kind: 'load' }>, known: BlendInput
   }
 }
 
-function solve(request: BlendRequest, known: BlendInputs): Solved {
+interface Question {
+  turn: number;
+  request: BlendRequest;
+  limitMs: number;
+}
+
+function solve({ turn, request, limitMs }: Question, known: BlendInputs): Solved {
   const { problem, materials: _, limitsWithoutFigure, leftOut, ...asked } = buildBlendProblem(request, known);
-  const solution = solveBlend(problem, { timeLimitMs: 5_000, now: () => performance.now() });
+  const solution = solveBlend(problem, {
+    timeLimitMs: limitMs,
+    now: () => performance.now(),
+    onBetter: ({ distance }) => scope.postMessage({ kind: 'better', turn, distance }),
+  });
   return { request, solution, certificate: certify(problem, solution), asked, limitsWithoutFigure, leftOut };
+}
+
+const OTHERS = 4;
+
+/** The first is the blend itself. */
+function others({ request, limitMs }: Question, known: BlendInputs): OtherBlend[] {
+  const { problem } = buildBlendProblem(request, known);
+  const found = alternativeBlends(problem, OTHERS + 1, { timeLimitMs: limitMs, now: () => performance.now() });
+  return found.slice(1).map(({ distance, costPerKg, lines }) => ({
+    ...{ distance, costPerKg },
+    lines: lines.map(({ id, impact }) => ({ id, impact })),
+  }));
 }

@@ -4,12 +4,15 @@ import { type BlendLineShown, LinesTable } from '@/app/_components/blend/lines-t
 import { Sentences } from '@/app/_components/blend/sentences';
 import { Verdicts } from '@/app/_components/blend/verdicts';
 import { ProfileBars } from '@/app/_components/charts/profile-bars';
+import { Button } from '@/app/_components/ui/button';
 import type { BlendAnswer } from '@/lib/shared/blend-answer';
 import { isIncomplete } from '@/lib/shared/blend-candidate';
+import { pointsOf } from '@/lib/shared/blend-figures';
 import type { BlendRequest } from '@/lib/shared/blend-input';
 import type { AskedBlend } from '@/lib/shared/blend-problem';
 import { withMaterialRule } from '../_client/material-rule';
 import type { Solved } from '../_client/messages';
+import type { Search } from '../_client/use-long-search';
 import { ClashPanel } from './clash-panel';
 import type { BenchParts } from './parts';
 
@@ -18,15 +21,17 @@ interface AnswerPanelProps extends BenchParts {
   answer: BlendAnswer;
   solved: Solved;
   asked: AskedBlend;
+  search: Search | null;
 }
 
 export const AnswerPanel = memo(function AnswerPanel(props: AnswerPanelProps) {
-  const { facets, currency, request, answer, solved, asked, faults, onChange } = props;
+  const { facets, currency, request, answer, solved, asked, search, faults, onChange } = props;
   const { target } = asked;
   if (answer.clash) return <ClashPanel clash={answer.clash} proof={answer.proof} onChange={onChange} />;
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-6 pt-5 pb-6">
       <Faults sentences={Object.values(faults)} />
+      <SearchNote search={search} />
       <div className="grid gap-5 px-5 md:px-6">
         <h2 className="sr-only">The closest blend</h2>
         <Headline
@@ -149,6 +154,22 @@ function Faults({ sentences }: { sentences: readonly string[] }) {
       <p className="text-ink-soft">Below stands the last blend that could be solved.</p>
     </div>
   ) : null;
+}
+
+/** Rules that count materials leave many blends to look through. */
+function SearchNote({ search }: { search: Search | null }) {
+  if (!search) return null;
+  return (
+    <p role="status" className="mx-5 flex items-center justify-between gap-3 border-l-4 border-ink bg-wash p-3 md:mx-6">
+      <span>
+        Still looking for a closer one
+        {search.best === null ? '' : `; the best so far is ${pointsOf(search.best)} points away`}
+      </span>
+      <Button size="small" onClick={search.stop}>
+        Stop
+      </Button>
+    </p>
+  );
 }
 
 const REASONS = {

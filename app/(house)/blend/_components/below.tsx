@@ -6,9 +6,10 @@ import type { BlendAnswer } from '@/lib/shared/blend-answer';
 import type { BlendRequest } from '@/lib/shared/blend-input';
 import type { AskedBlend } from '@/lib/shared/blend-problem';
 import type { FrontierStep } from '../_client/messages';
+import { OtherBlends } from './other-blends';
 import type { BenchParts } from './parts';
 
-interface BelowProps extends Pick<BenchParts, 'facets' | 'currency' | 'onChange'> {
+interface BelowProps extends Pick<BenchParts, 'facets' | 'currency' | 'inputs' | 'byId' | 'onChange'> {
   request: BlendRequest;
   answer: BlendAnswer;
   asked: AskedBlend;
@@ -19,14 +20,16 @@ interface BelowProps extends Pick<BenchParts, 'facets' | 'currency' | 'onChange'
 /** So many stand around the target; the rest is in the table. */
 const AROUND = 10;
 
-export function Below({ facets, currency, request, answer, asked, frontier, onChange }: BelowProps) {
+export function Below(props: BelowProps) {
+  const { facets, currency, request, answer, asked, frontier, onChange } = props;
   const { target } = asked;
   return (
     <div className="tiles border-t-0 xl:grid-cols-2">
       <Tile title="Price against closeness">
         <p className="pb-3 text-ink-soft">
           {request.ceiling?.basis === 'per kg' ? 'Per kg' : 'At equal strength'}. Each point is the closest blend at its
-          price; pick one to set the ceiling.
+          price{request.maxMaterials || request.minDose ? ', however many materials it takes' : ''}; pick one to set the
+          ceiling.
         </p>
         {frontier === null ? (
           <Skeleton className="h-56" />
@@ -50,6 +53,7 @@ export function Below({ facets, currency, request, answer, asked, frontier, onCh
           }))}
         />
       </Tile>
+      <OtherBlends {...props} />
     </div>
   );
 }

@@ -5,7 +5,7 @@ import { useCallback, useMemo, useState } from 'react';
 import { Button, ButtonLink } from '@/app/_components/ui/button';
 import { Sheet } from '@/app/_components/ui/dialog';
 import { ScreenHead } from '@/app/_components/ui/screen';
-import { EmptyState, ErrorState } from '@/app/_components/ui/states';
+import { EmptyState, ErrorState, LoadingState } from '@/app/_components/ui/states';
 import type { BlendRequest } from '@/lib/shared/blend-input';
 import type { BlendInputs } from '@/lib/shared/blend-problem';
 import type { FacetView } from '@/lib/shared/facet';
@@ -33,7 +33,7 @@ export interface BlendBenchProps {
 export function BlendBench({ facets, currency, maySave, start, inputs, tables, onPackGrams }: BlendBenchProps) {
   const [address, setAddress] = useQueryStates({ target: parseAsString, category: parseAsString });
   const [request, setRequest] = useState(() => start ?? fromAddress(address, inputs, tables));
-  const { solved, asked, answer, faults, isBroken } = useSolved(inputs, request, currency);
+  const { solved, asked, answer, faults, isBroken, search } = useSolved(inputs, request, currency);
   const frontier = useFrontier(inputs, request);
   const isWide = useWide();
   const [rulesOpen, setRulesOpen] = useState(false);
@@ -83,22 +83,22 @@ export function BlendBench({ facets, currency, maySave, start, inputs, tables, o
         </div>
         <div className="lg:row-span-2">
           {request && answer && solved && asked ? (
-            <AnswerPanel {...parts} request={request} answer={answer} solved={solved} asked={asked} onChange={change} />
+            <AnswerPanel
+              {...parts}
+              request={request}
+              answer={answer}
+              solved={solved}
+              asked={asked}
+              search={search}
+              onChange={change}
+            />
           ) : (
             <NothingYet faults={faults} hasRequest={request !== null} />
           )}
         </div>
       </div>
       {request && answer && asked && answer.lines.length > 0 ? (
-        <Below
-          facets={facets}
-          currency={currency}
-          request={request}
-          answer={answer}
-          asked={asked}
-          frontier={frontier}
-          onChange={change}
-        />
+        <Below {...parts} request={request} answer={answer} asked={asked} frontier={frontier} onChange={change} />
       ) : null}
       {!isWide && rules ? (
         <>
@@ -130,7 +130,7 @@ function NothingYet({ faults, hasRequest }: { faults: Record<string, string>; ha
       </EmptyState>
     );
   return hasRequest ? (
-    <EmptyState title="Solving" />
+    <LoadingState>Solving</LoadingState>
   ) : (
     <EmptyState title="What shall it smell like?">
       Choose a material that is too dear, has run out or must be replaced, or draw the smell you want.
