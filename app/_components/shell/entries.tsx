@@ -35,6 +35,12 @@ export const ENTRIES: readonly RailEntry[] = [
       <path d="M8 2.500h4M9 2.500V8l-5 8.200a.9.9 0 0 0 .8 1.300h10.400a.9.9 0 0 0 .8-1.300L11 8V2.500M6.2 12.500h7.6" />
     ),
   },
+  {
+    href: '/blends',
+    name: 'Saved blends',
+    permission: 'blend.read',
+    drawing: <path d="M4 2.500h9l3 3V17.500H4ZM13 2.500v3h3M7 9.500h6M7 12.500h6M7 15h3" />,
+  },
 ];
 
 export function Drawing({ children }: { children: ReactNode }) {

@@ -34,11 +34,11 @@ export function OtherBlends({ inputs, byId, currency, request, answer, onChange 
         <p>No other blend keeps these rules.</p>
       ) : (
         <ul className="grid">
-          {blends.map((blend) => {
-            const { without, instead } = compared(answer, blend);
+          {blends.map((blend, index) => {
+            const { without, instead } = compared(answer, blends.slice(0, index), blend);
             return (
               <li
-                key={without.join()}
+                key={blend.lines.map(({ id }) => id).join()}
                 className="grid gap-x-6 gap-y-1 border-t border-grout py-3 md:grid-cols-[9rem_9rem_1fr_auto]"
               >
                 <span className="figures">{pointsOf(blend.distance)} points away</span>
@@ -63,12 +63,18 @@ export function OtherBlends({ inputs, byId, currency, request, answer, onChange 
   );
 }
 
-/** What it does without, and what it takes instead, most impact first. */
-function compared(answer: BlendAnswer, other: OtherBlend) {
+/** A line that does this much of the smell makes a blend what it is. */
+const MATTERS = 0.05;
+
+/** Which materials that matter in the blends before it it does without, and what it takes that this one does not. */
+function compared(answer: BlendAnswer, before: readonly OtherBlend[], other: OtherBlend) {
   const its = new Set(other.lines.map(({ id }) => id));
-  const ours = new Set(answer.lines.map(({ material }) => material.id));
+  const ours = answer.lines.map(({ material, impact }) => ({ id: material.id, impact }));
+  const earlier = [ours, ...before.map(({ lines }) => lines)].flat().filter(({ impact }) => impact >= MATTERS);
   return {
-    without: answer.lines.map(({ material }) => material.id).filter((id) => !its.has(id)),
-    instead: other.lines.toSorted((a, b) => b.impact - a.impact).flatMap(({ id }) => (ours.has(id) ? [] : [id])),
+    without: [...new Set(earlier.map(({ id }) => id))].filter((id) => !its.has(id)),
+    instead: other.lines
+      .toSorted((a, b) => b.impact - a.impact)
+      .flatMap(({ id }) => (ours.some((line) => line.id === id) ? [] : [id])),
   };
 }
