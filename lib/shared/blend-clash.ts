@@ -29,6 +29,9 @@ export function clashOf(solution: BlendSolution, context: RuleContext): Clash | 
   return { rules: asked.map((rule) => ruleInWords(rule, context)), ways: [...loosened, ...dropped] };
 }
 
+/** Nobody doses a material at more than this many times its largest advisable share: no way out for a nose. */
+const BEARABLE = 3;
+
 function loosen(rule: AskedRule, to: number, { request, built, currency }: RuleContext): WayOut | null {
   const way = (words: string, change: Partial<BlendRequest>, isAboutPrice = false): WayOut => ({
     words,
@@ -69,6 +72,7 @@ function loosen(rule: AskedRule, to: number, { request, built, currency }: RuleC
     }
     case 'largest share': {
       const share = Math.min(1, roundOut(to, 'up'));
+      if (share > BEARABLE * (built.materials.get(rule.id)?.maxShare ?? 1)) return null;
       const others = request.maxShares.filter(({ materialId }) => materialId !== rule.id);
       return way(`Allow ${percent(share)} of ${rule.name}`, { maxShares: [...others, { materialId: rule.id, share }] });
     }

@@ -98,5 +98,5 @@ export function heldBackBy(found: readonly Relief[]): string[] {
   if (!first) return [NOTHING_HOLDS];
   const sentence = `${first.what} is what holds you back: ${first.words.charAt(0).toLowerCase()}${first.words.slice(1)}`;
   const more = others.slice(0, 2).map(({ what }) => what.charAt(0).toLowerCase() + what.slice(1).replace(/,$/, ''));
-  return more.length > 0 ? [sentence, `After that come ${listed(more)}.`] : [sentence];
+  return more.length > 0 ? [sentence, `After that ${more.length > 1 ? 'come' : 'comes'} ${listed(more)}.`] : [sentence];
 }

@@ -62,7 +62,9 @@ export function ruleInWords(rule: AskedRule, { request, built, currency }: RuleC
     case 'required':
       return `${rule.name} must be in it`;
     case 'largest share':
-      return `at most ${percent(largestShare(rule.id, { request, built }))} of ${rule.name}`;
+      return `at most ${percent(largestShare(rule.id, { request, built }))} of ${rule.name}${
+        request.maxShares.some(({ materialId }) => materialId === rule.id) ? '' : ', its largest advisable share'
+      }`;
     case 'most materials':
       return `at most ${request.maxMaterials} materials`;
     case 'least dose':

@@ -98,3 +98,20 @@ it('never uses a word of the solver', () => {
   expect(words).not.toMatch(/multiplier|slack|objective|infeasible|constraint|optim|residual/i);
   expect(LIBRARY.length).toBeGreaterThan(0);
 });
+
+it('offers no dose that no nose could bear as a way out', () => {
+  const { solution, context } = solved(request({ minStrength: 9 }));
+  const clash = clashOf(
+    {
+      ...solution,
+      conflict: ['minStrength', 'share:leaf'],
+      relax: [
+        { rule: 'share:leaf', from: 0.02, to: 0.4 },
+        { rule: 'minStrength', from: 54, to: 4 },
+      ],
+    },
+    context,
+  )!;
+  expect(clash.rules[1]).toBe('at most 2 % of Leaf, its largest advisable share');
+  expect(clash.ways.map(({ words }) => words)).toEqual(['Ask for 66.6 % as strong as Absolute only']);
+});

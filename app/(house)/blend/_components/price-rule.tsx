@@ -72,7 +72,7 @@ export function PriceRule(props: RulesProps & { reliefs: readonly Relief[] }) {
 const drawnCeiling = (cost: number | undefined): string | null =>
   cost && Number.isFinite(cost) && cost > 0 ? new Decimal(cost / 2).toSignificantDigits(2).toFixed() : null;
 
-const sliderStep = (top: number): number => 10 ** Math.max(-2, Math.floor(Math.log10(top)) - 2);
+const sliderStep = (top: number): number => 10 ** Math.max(-2, Math.floor(Math.log10(top)) - 3);
 
 function explain(ceiling: BlendRequest['ceiling'], name: string | undefined): string {
   if (!ceiling) return 'The price does not matter.';
