@@ -70,6 +70,7 @@ export class ActiveSet {
   zeta = new Float64Array(64);
   private damped = new Float64Array(64);
   readonly residual: Float64Array;
+  private residualIsFresh = false;
   private readonly along: Float64Array;
   private gradient = new Float64Array(64);
   private entries = new Float64Array(64);
@@ -82,6 +83,8 @@ export class ActiveSet {
   /** 1 for a row of the working set, 2 for one left aside for now. */
   private readonly inRows: Uint8Array;
   private readonly ignored: number[] = [];
+  /** Kept lines that the others imply so far: they hold by themselves until another material comes in. */
+  private readonly waiting: number[] = [];
   private readonly damping: number;
   private readonly facets: number;
 
@@ -104,15 +107,22 @@ export class ActiveSet {
   begin(point: Point): void {
     this.materials.length = 0;
     this.rows.length = 0;
+    this.residualIsFresh = false;
     this.factor.clear();
     this.inRows.fill(0);
     let sum = 0;
     for (const [k, i] of point.materials.entries()) sum += point.grams[k]! * this.goal.normal[i]!;
     this.grams = point.grams.reduce((total, z) => total + z, 0) / sum;
     this.factor.addRow(this.entries);
+    this.waiting.length = 0;
     for (const [k, i] of point.materials.entries()) this.addMaterial(i, point.grams[k]! / sum);
     this.ignored.length = 0;
-    for (const r of point.rows) if (this.binds(r)) this.tryRow(r);
+    const { rules, asleep } = this.prepared;
+    const left = this.goal.left ?? asleep;
+    for (let r = 0; r < this.prepared.general; r++) {
+      if (rules[r]!.kind === 'exact' && left[r] === 0 && !this.tryRow(r)) this.waiting.push(r);
+    }
+    for (const r of point.rows) if (rules[r]!.kind !== 'exact' && this.binds(r)) this.tryRow(r);
   }
 
   /** Runs to the optimum, or until `limit` steps are done; true if it got there. */
@@ -144,6 +154,7 @@ export class ActiveSet {
       if (this.u[k]! >= TRACE) continue;
       const i = this.materials[k]!;
       const grams = this.gramsOf(k);
+      this.residualIsFresh = false;
       this.removeMaterial(k);
       if (this.factor.rows <= this.materials.length && this.factor.dependentRow(DEPENDENCE) < 0) any = true;
       else this.addMaterial(i, grams);
@@ -244,7 +255,8 @@ export class ActiveSet {
 
   computeResidual(): void {
     const { prepared, facets, residual } = this;
-    if (facets === 0) return;
+    if (facets === 0 || this.residualIsFresh) return;
+    this.residualIsFresh = true;
     for (let f = 0; f < facets; f++) residual[f] = -prepared.target[f]!;
     for (let k = 0; k < this.materials.length; k++) {
       addTo(residual, 0, this.impactOf(k), prepared.vectors, this.materials[k]! * facets, facets);
@@ -266,12 +278,17 @@ export class ActiveSet {
     const size = this.materials.length;
     const { step } = factor;
     const block = this.firstBlock();
+    let furthest = 0;
     for (let k = 0; k < size; k++) {
-      const next = u[k]! + block.part * step[k]!;
-      u[k] = Math.max(next, 0);
+      furthest = Math.max(furthest, Math.abs(block.part * step[k]!));
+      u[k] = Math.max(u[k]! + block.part * step[k]!, 0);
     }
-    this.stalled = block.part > 0 ? 0 : this.stalled + 1;
+    this.residualIsFresh = false;
+    this.stalled = furthest > SLIP ? 0 : this.stalled + 1;
     if (block.part > 0 && this.ignored.length > 0) this.heed();
+    if (furthest > NEAR) this.pricing.unbar();
+    // Lawson and Hanson's guard: what wants to go below 0 as soon as it is in came in by rounding, and would come again
+    if (block.part === 0 && block.material === size - 1) this.pricing.bar(this.materials[block.material]!);
     if (block.material >= 0) this.dropMaterial(block.material);
     else if (block.row >= 0 && !this.tryRow(block.row)) this.ignore(block.row);
     return block.material < 0 && block.row < 0;
@@ -423,6 +440,9 @@ export class ActiveSet {
     materials.push(i);
     factor.addMaterial(this.gradient, own + damping, 0.5 * damping, this.entries);
     this.pricing.used[i] = 1;
+    for (let w = this.waiting.length - 1; w >= 0; w--) {
+      if (this.tryRow(this.waiting[w]!)) this.waiting.splice(w, 1);
+    }
   }
 
   /** Takes a material out, and with it any row that only this material kept independent of the others. */
@@ -432,6 +452,7 @@ export class ActiveSet {
       const [row] = this.rows.splice(r - 1, 1);
       this.factor.removeRow(r);
       this.inRows[row!] = 0;
+      if (this.prepared.rules[row!]!.kind === 'exact') this.waiting.push(row!);
     }
   }
 
@@ -477,7 +498,7 @@ export class ActiveSet {
     for (let k = 0; k < this.materials.length; k++) {
       value += this.coefficient(r, this.materials[k]!, this.zeta[k]!) * this.u[k]!;
     }
-    return this.prepared.rules[r]!.kind === 'exact' || value > -NEAR;
+    return value > -NEAR;
   }
 
   private coefficient(r: number, i: number, zeta: number): number {

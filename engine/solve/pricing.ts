@@ -3,7 +3,7 @@ import type { Prepared } from './prepare';
 import { product } from './triangle';
 
 /** Materials looked at again before all of them are: most of the next ones to enter are among them. */
-const LIST = 40;
+const LIST = 8;
 /** Gains below this share of the objective's scale are left: the gap that is promised is a hundred times wider. */
 const EXACT = 1e-11;
 const ROUNDING = 1e-15;
@@ -25,6 +25,8 @@ export class Pricing {
   private readonly list = new Int32Array(LIST);
   private readonly scores = new Float64Array(LIST);
   private listed = 0;
+  private readonly barred: number[] = [];
+  private readonly isBarred: Uint8Array;
 
   constructor(
     private readonly prepared: Prepared,
@@ -32,6 +34,7 @@ export class Pricing {
     private readonly damping: number,
   ) {
     this.used = new Uint8Array(prepared.count);
+    this.isBarred = new Uint8Array(prepared.count);
     this.facets = goal.linear ? 0 : prepared.facets;
     this.lambda = new Float64Array(prepared.rules.length);
     this.setScale(goal.linear ? 1e6 * damping : 0.5 * prepared.targetSize);
@@ -41,6 +44,17 @@ export class Pricing {
   setScale(scale: number): void {
     this.tolerance = EXACT * scale;
     this.rowTolerance = 100 * ROUNDING * scale;
+  }
+
+  /** Leaves a material out of the choice until `unbar`. */
+  bar(i: number): void {
+    this.barred.push(i);
+    this.isBarred[i] = 1;
+  }
+
+  unbar(): void {
+    for (const i of this.barred) this.isBarred[i] = 0;
+    this.barred.length = 0;
   }
 
   /** Reads the multipliers of the working set, per unit of each row. */
@@ -111,6 +125,7 @@ export class Pricing {
   /** Reduced cost over the root of the curvature, both per amount; 0 where there is no gain beyond rounding. */
   private score(i: number, set: ActiveSet): number {
     const { prepared, facets } = this;
+    if (this.isBarred[i] === 1) return 0;
     const strength = prepared.strength[i]!;
     let rows = this.lift;
     for (let at = prepared.start[i]!; at < prepared.start[i + 1]!; at++) {

@@ -3,10 +3,8 @@
 /** v := L^-1 v */
 export function forward(l: Float64Array, stride: number, size: number, v: Float64Array, at: number): void {
   for (let i = 0; i < size; i++) {
-    let sum = v[at + i]!;
     const row = i * stride;
-    for (let j = 0; j < i; j++) sum -= l[row + j]! * v[at + j]!;
-    v[at + i] = sum / l[row + i]!;
+    v[at + i] = (v[at + i]! - product(l, row, v, at, i)) / l[row + i]!;
   }
 }
 
@@ -53,9 +51,7 @@ export function reflectColumns(
 ): void {
   for (let k = 0; k < columns; k++) {
     const at = k * stride;
-    let sum = 0;
-    for (let i = k; i < size; i++) sum += q[at + i]! * q[at + i]!;
-    const length = Math.sqrt(sum);
+    const length = Math.sqrt(product(q, at + k, q, at + k, size - k));
     if (length === 0) {
       diagonal[k] = 0;
       continue;
@@ -73,17 +69,25 @@ export function reflectColumns(
 
 /** v := (I - h h') v, both from entry k on. */
 export function reflectOne(q: Float64Array, at: number, k: number, size: number, v: Float64Array, to: number): void {
-  let sum = 0;
-  for (let i = k; i < size; i++) sum += q[at + i]! * v[to + i]!;
-  if (sum === 0) return;
-  for (let i = k; i < size; i++) v[to + i] = v[to + i]! - sum * q[at + i]!;
+  const sum = product(q, at + k, v, to + k, size - k);
+  if (sum !== 0) addTo(v, to + k, -sum, q, at + k, size - k);
 }
 
-/** sum of u_i v_i over `size` entries, from two places. */
+/** sum of u_i v_i over `size` entries, from two places. Four sums at once: one would wait for itself at every step. */
 export function product(u: Float64Array, from: number, v: Float64Array, at: number, size: number): number {
-  let sum = 0;
-  for (let i = 0; i < size; i++) sum += u[from + i]! * v[at + i]!;
-  return sum;
+  let a = 0;
+  let b = 0;
+  let c = 0;
+  let d = 0;
+  let i = 0;
+  for (; i + 3 < size; i += 4) {
+    a += u[from + i]! * v[at + i]!;
+    b += u[from + i + 1]! * v[at + i + 1]!;
+    c += u[from + i + 2]! * v[at + i + 2]!;
+    d += u[from + i + 3]! * v[at + i + 3]!;
+  }
+  for (; i < size; i++) a += u[from + i]! * v[at + i]!;
+  return a + b + (c + d);
 }
 
 /** v[at...] += factor u[from...] */

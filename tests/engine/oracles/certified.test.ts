@@ -7,7 +7,7 @@ const PROBLEMS = 1000;
 const COUNTING_PROBLEMS = 60;
 
 /** Where the method still ends short of the optimum, and says so: to be emptied. */
-const STOPPED_SHORT = new Set([119, 312, 684, 753, 914, 930]);
+const STOPPED_SHORT = new Set([337]);
 
 it(`claims nothing wrong on ${PROBLEMS} generated problems, possible or not`, { timeout: 240_000 }, () => {
   const wrong: string[] = [];
