@@ -40,18 +40,21 @@ export function Below(props: BelowProps) {
         )}
       </Tile>
       <Tile title={`Around ${target.name}`}>
-        <MapAround
-          facets={facets}
-          target={{
-            id: target.material?.id ?? 'target',
-            name: target.name,
-            profile: target.profile,
-            phases: target.material?.phases,
-          }}
-          nodes={answer.lines.slice(0, AROUND).map(({ material, impact }) => ({
-            ...{ id: material.id, name: material.name, profile: material.profile, phases: material.phases, impact },
-          }))}
-        />
+        {/* A long name at the rim may reach beyond a phone's edge; it must not widen the page. */}
+        <div className="overflow-x-clip">
+          <MapAround
+            facets={facets}
+            target={{
+              id: target.material?.id ?? 'target',
+              name: target.name,
+              profile: target.profile,
+              phases: target.material?.phases,
+            }}
+            nodes={answer.lines.slice(0, AROUND).map(({ material, impact }) => ({
+              ...{ id: material.id, name: material.name, profile: material.profile, phases: material.phases, impact },
+            }))}
+          />
+        </div>
       </Tile>
       <OtherBlends {...props} />
     </div>
