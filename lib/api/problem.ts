@@ -28,7 +28,8 @@ export function problemResponse(error: unknown): Response {
   return new Response(JSON.stringify({ type: 'about:blank', ...problem }), { status: problem.status, headers });
 }
 
-function problemOf(error: unknown): Problem {
+/** What is told of an error, and of anything unforeseen only a reference. */
+export function problemOf(error: unknown): Problem {
   if (error instanceof Invalid)
     return { status: 422, title: 'Something in it needs correcting', detail: error.message, errors: error.fields };
   if (error instanceof EngineInputError)

@@ -6,6 +6,7 @@ import { isSameOrigin } from '@/lib/auth/origin';
 import { memberOfToken, SESSION_COOKIE } from '@/lib/auth/session';
 import { Invalid } from '@/lib/errors';
 import type { Permission } from '@/lib/shared/permissions';
+import { eventAnswer, type Settled, wantsEvents } from './event-answer';
 import { answerOnce } from './idempotency';
 import { problemResponse, refusal } from './problem';
 
@@ -29,6 +30,14 @@ export interface Operation {
   status?: 200 | 201;
   /** A POST that creates: the client must send an Idempotency-Key, and a repeat gets the first answer. */
   once?: boolean;
+  /** What is reported on the way, for a client that asks for events (Accept: text/event-stream). */
+  progress?: z.ZodType;
+}
+
+/** How the work learns that nobody waits any more, and tells how far it is. */
+export interface Work<O extends Operation> {
+  signal: AbortSignal;
+  report: (progress: O['progress'] extends z.ZodType ? z.input<O['progress']> : never) => void;
 }
 
 type Parsed<T> = T extends z.ZodType ? z.output<T> : undefined;
@@ -49,7 +58,7 @@ export type RouteHandler = ((request: Request, route: RouteContext) => Promise<R
  */
 export function teamRoute<const O extends Operation>(
   operation: O,
-  handler: (ctx: Member, input: Input<O>) => Promise<z.input<O['result']>>,
+  handler: (ctx: Member, input: Input<O>, work: Work<O>) => Promise<z.input<O['result']>>,
 ): RouteHandler {
   const route = async (request: Request, { params }: RouteContext): Promise<Response> => {
     try {
@@ -64,13 +73,19 @@ export function teamRoute<const O extends Operation>(
         query: parse(operation.query, Object.fromEntries(new URL(request.url).searchParams)),
         body: parse(operation.body, operation.body ? json(text) : undefined),
       } as Input<O>;
-      const work = async () => operation.result.parse(await handler(ctx, input));
-      const status = operation.status ?? 200;
-      if (!operation.once) return answer(status, await work());
       const key = request.headers.get('idempotency-key');
       const asked = `${new URL(request.url).pathname} ${text}`;
-      const settled = await answerOnce({ ctx, operation: operation.id, key, request: asked, status }, work);
-      return answer(settled.status, settled.answer);
+      const settle = async (report: (progress: unknown) => void): Promise<Settled> => {
+        const work = async () => operation.result.parse(await handler(ctx, input, { signal: request.signal, report }));
+        const status = operation.status ?? 200;
+        if (!operation.once) return { status, answer: await work() };
+        return answerOnce({ ctx, operation: operation.id, key, request: asked, status }, work);
+      };
+      const { progress } = operation;
+      if (progress && wantsEvents(request.headers))
+        return eventAnswer((report) => settle((reported) => report(progress.parse(reported))));
+      const { status, answer } = await settle(() => undefined);
+      return Response.json(answer, { status, headers: { 'cache-control': 'no-store' } });
     } catch (error) {
       return problemResponse(error);
     }
@@ -81,10 +96,6 @@ export function teamRoute<const O extends Operation>(
 async function memberOfRequest(): Promise<Member | null> {
   const token = (await cookies()).get(SESSION_COOKIE)?.value;
   return token ? memberOfToken(token) : null;
-}
-
-function answer(status: number, body: unknown): Response {
-  return Response.json(body, { status, headers: { 'cache-control': 'no-store' } });
 }
 
 async function bodyText(request: Request): Promise<string> {

@@ -6,7 +6,7 @@ import { readLimitTables } from '@/lib/limits/queries';
 import { type BlendRequest, RequestFault } from '@/lib/shared/blend-input';
 import { type BuiltProblem, buildBlendProblem } from '@/lib/shared/blend-problem';
 import type { FacetView } from '@/lib/shared/facet';
-import { type Solved, solveInPool } from '@/lib/solving/pool';
+import { type Solved, type SolveOptions, solveInPool } from '@/lib/solving/pool';
 import { listCandidates } from './candidates';
 
 /** Discrete rules can take long; what was found by then is answered with an honest bound. */
@@ -19,8 +19,11 @@ export interface SolvedRequest extends Solved {
   currency: string;
 }
 
+/** Ends the solve when nobody waits, and hears of every better blend on the way. */
+export type Watch = Pick<SolveOptions, 'signal' | 'onBetter'>;
+
 /** Builds the problem from the house's rows, never from what a client says of them, and solves it. */
-export async function solveRequest(ctx: Member, request: BlendRequest, signal?: AbortSignal): Promise<SolvedRequest> {
+export async function solveRequest(ctx: Member, request: BlendRequest, watch: Watch = {}): Promise<SolvedRequest> {
   const [candidates, limits, facets] = await Promise.all([
     listCandidates(ctx, request.packGrams),
     readLimitTables(ctx),
@@ -28,7 +31,7 @@ export async function solveRequest(ctx: Member, request: BlendRequest, signal?: 
   ]);
   const built = buildOrRefuse(request, { facetIds: candidates.facetIds, candidates: candidates.items, limits });
   const { solution, certificate } = await inTurn(ctx.userId, () =>
-    solveInPool(built.problem, { timeLimitMs: TIME_LIMIT_MS, signal }),
+    solveInPool(built.problem, { timeLimitMs: TIME_LIMIT_MS, ...watch }),
   );
   return { request, built, facets, currency: candidates.currency, solution, certificate };
 }

@@ -131,3 +131,7 @@ export const savedBlendList = z.strictObject({ items: z.array(savedBlendItem), n
 export type SavedBlendList = z.output<typeof savedBlendList>;
 export const blendParams = z.strictObject({ id: z.string() });
 export const previewBlendInput = z.strictObject({ request: blendRequest });
+
+/** While a long solve goes on: how far the best blend so far is from the target, and what none can go below. */
+export const solveProgress = z.object({ distance: z.number(), bound: z.number() });
+export type SolveProgress = z.infer<typeof solveProgress>;

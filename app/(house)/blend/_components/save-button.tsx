@@ -2,15 +2,15 @@
 
 import { useMutation } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
-import { useMemo, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import { Button } from '@/app/_components/ui/button';
 import { Dialog } from '@/app/_components/ui/dialog';
 import { TextArea, TextField } from '@/app/_components/ui/field';
 import { announce } from '@/app/_components/ui/toast';
-import { ApiProblem, sendApi } from '@/lib/shared/api-client';
+import { ApiProblem, watchApi } from '@/lib/shared/api-client';
 import type { BlendAnswer } from '@/lib/shared/blend-answer';
 import type { BlendRequest } from '@/lib/shared/blend-input';
-import type { SavedBlendView } from '@/lib/shared/blend-view';
+import type { SavedBlendView, SolveProgress } from '@/lib/shared/blend-view';
 
 interface SaveButtonProps {
   request: BlendRequest | null;
@@ -39,8 +39,19 @@ function SaveDialog({ request, onClose }: { request: BlendRequest; onClose: () =
   // One key for one content: sent twice it is saved once, and a changed name is a new wish.
   // biome-ignore lint/correctness/useExhaustiveDependencies: a new body must get a new key
   const key = useMemo(() => crypto.randomUUID(), [body]);
+  const [progress, setProgress] = useState<SolveProgress | null>(null);
+  const giveUp = useRef<AbortController | null>(null);
+  useEffect(() => () => giveUp.current?.abort(), []);
   const save = useMutation({
-    mutationFn: () => sendApi<SavedBlendView>('POST', '/api/v1/blends', { name, note, request }, key),
+    mutationFn: () => {
+      giveUp.current = new AbortController();
+      return watchApi<SavedBlendView>(
+        '/api/v1/blends',
+        { name, note, request },
+        { key, signal: giveUp.current.signal, onProgress: (told) => setProgress(told as SolveProgress) },
+      );
+    },
+    onSettled: () => setProgress(null),
     onSuccess: ({ id }) => {
       announce('Saved.');
       router.push(`/blends/${id}`);
@@ -55,7 +66,7 @@ function SaveDialog({ request, onClose }: { request: BlendRequest; onClose: () =
       title="Save the blend"
       actions={
         <>
-          <Button onClick={onClose}>Not yet</Button>
+          <Button onClick={onClose}>{save.isPending ? 'Stop' : 'Not yet'}</Button>
           <Button look="solid" disabled={save.isPending} onClick={() => save.mutate()}>
             {save.isPending ? 'Solving and saving' : 'Save'}
           </Button>
@@ -81,6 +92,12 @@ function SaveDialog({ request, onClose }: { request: BlendRequest; onClose: () =
         onChange={(event) => setNote(event.target.value)}
         error={fields.note}
       />
+      {save.isPending && progress ? (
+        <p role="status" className="text-ink-soft">
+          The best so far is {progress.distance.toFixed(2)} from the target, and none can be nearer than{' '}
+          {progress.bound.toFixed(2)}. The search goes on.
+        </p>
+      ) : null}
       {save.isError && other.length + Object.keys(fields).length === 0 ? (
         <p role="alert">{save.error.message}</p>
       ) : null}

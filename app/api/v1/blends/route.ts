@@ -2,7 +2,7 @@ import { teamRoute } from '@/lib/api/team-route';
 import { saveBlend } from '@/lib/blends/commands';
 import { listBlends } from '@/lib/blends/queries';
 import { saveBlendInput } from '@/lib/shared/blend-input';
-import { savedBlendList, savedBlendQuery, savedBlendView } from '@/lib/shared/blend-view';
+import { savedBlendList, savedBlendQuery, savedBlendView, solveProgress } from '@/lib/shared/blend-view';
 
 export const GET = teamRoute(
   { id: 'blends.list', permission: 'blend.read', query: savedBlendQuery, result: savedBlendList },
@@ -17,6 +17,7 @@ export const POST = teamRoute(
     result: savedBlendView,
     status: 201,
     once: true,
+    progress: solveProgress,
   },
-  (ctx, { body }) => saveBlend(ctx, body),
+  (ctx, { body }, { signal, report }) => saveBlend(ctx, body, { signal, onBetter: report }),
 );
