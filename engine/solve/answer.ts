@@ -1,9 +1,9 @@
 import type { BlendSolution, RulePrice } from '../contract';
 import { profileAngle } from '../odour/angle';
-import type { Point } from './active-set';
 import type { Evidence } from './evidence';
 import type { Prepared } from './prepare';
 import type { Rule } from './rules';
+import type { Point } from './working-set';
 
 /** 'optimal' promises this of the gap, relative to max(objective, sum w t^2), and of the worst relative excess. */
 export const PROMISED = 1e-9;

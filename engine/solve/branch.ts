@@ -1,5 +1,4 @@
 import type { Run } from '../contract';
-import type { Point } from './active-set';
 import { closest } from './closest';
 import { mandatory } from './discrete';
 import type { Evidence } from './evidence';
@@ -7,6 +6,7 @@ import { Heap } from './heap';
 import { OneMore } from './one-more';
 import type { Prepared } from './prepare';
 import { closestOf } from './subset';
+import type { Point } from './working-set';
 
 /** What is left of the problem: materials that are used for certain, materials that are out, and its relaxation. */
 interface Node {

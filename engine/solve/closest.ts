@@ -1,8 +1,9 @@
-import { ActiveSet, type Point } from './active-set';
+import { ActiveSet } from './active-set';
 import { type Evidence, evidenceOf, liftOdourless, worstViolation } from './evidence';
 import { type Forcing, forcedOut, raiseForcing } from './forced-out';
 import { phaseOne, type Start } from './phase-one';
 import type { Prepared } from './prepare';
+import type { Point } from './working-set';
 
 /** The answer to the convex problem: a blend with its evidence, or the weights of Farkas. */
 export type Closest =

@@ -2,7 +2,6 @@ import type { BlendProblem, FrontierPoint } from '../contract';
 import { EngineInputError } from '../errors';
 import { checkNumber, checkWhole, NOT_NEGATIVE } from '../input/fields';
 import { checkProblem } from '../input/problem';
-import type { Point } from './active-set';
 import { bestLimit, workingLimit } from './best-limit';
 import { closest } from './closest';
 import { describe } from './describe';
@@ -10,6 +9,7 @@ import { hasDiscreteRules } from './discrete';
 import { prepare } from './prepare';
 import { renewLimit } from './rows';
 import { solveBlend } from './solve-blend';
+import type { Point } from './working-set';
 
 /** More points than anybody could tell apart on a screen are a slip of the caller. */
 const MOST_POINTS = 1000;

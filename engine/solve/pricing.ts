@@ -1,6 +1,7 @@
-import type { ActiveSet, Goal } from './active-set';
+import type { ActiveSet } from './active-set';
 import type { Prepared } from './prepare';
 import { product } from './triangle';
+import type { Goal, WorkingSet } from './working-set';
 
 /** Materials looked at again before all of them are: most of the next ones to enter are among them. */
 const LIST = 8;
@@ -13,7 +14,10 @@ const ROUNDING = 1e-15;
  * step along it alone). A pass over all materials leaves a list of the best; the list is used up before the next pass.
  */
 export class Pricing {
-  readonly used: Uint8Array;
+  private readonly used: Uint8Array;
+  private readonly prepared: Prepared;
+  private readonly goal: Goal;
+  private readonly damping: number;
   /** A reduced cost per unit of impact above minus this is none. */
   tolerance = 0;
   rowTolerance = 0;
@@ -28,12 +32,11 @@ export class Pricing {
   private readonly barred: number[] = [];
   private readonly isBarred: Uint8Array;
 
-  constructor(
-    private readonly prepared: Prepared,
-    private readonly goal: Goal,
-    private readonly damping: number,
-  ) {
-    this.used = new Uint8Array(prepared.count);
+  constructor({ prepared, goal, damping, used }: WorkingSet) {
+    this.prepared = prepared;
+    this.goal = goal;
+    this.damping = damping;
+    this.used = used;
     this.isBarred = new Uint8Array(prepared.count);
     this.facets = goal.linear ? 0 : prepared.facets;
     this.lambda = new Float64Array(prepared.rules.length);
