@@ -13,7 +13,7 @@ export type ToWorker =
 export interface Solved {
   request: BlendRequest;
   solution: BlendSolution;
-  certificate: Certificate;
+  certificate: Certificate | null;
   asked: Omit<AskedBlend, 'materials'>;
   limitsWithoutFigure: string[];
   leftOut: BuiltProblem['leftOut'];
