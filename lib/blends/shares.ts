@@ -6,9 +6,10 @@ const UNITS = 10 ** DIGITS;
 
 /**
  * Shares as stored decimals that sum to exactly 1: each is cut to 14 digits, and the units left over go to the largest
- * remainders, ties to the earlier line. None is off by a whole unit.
+ * remainders, ties to the earlier line. None is off by a whole unit. Without a line there is nothing to hand out.
  */
 export function storedShares(shares: readonly number[]): string[] {
+  if (shares.length === 0) return [];
   const total = shares.reduce((sum, share) => sum + share, 0);
   const exact = shares.map((share) => (share / total) * UNITS);
   const units = exact.map(Math.floor);

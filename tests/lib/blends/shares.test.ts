@@ -38,3 +38,7 @@ it('holds a ceiling to a billionth', () => {
   expect(keepsCeiling(cost, { basis: 'per kg', amount: '100.0000001' })).toBe(true);
   expect(keepsCeiling(cost, null)).toBe(true);
 });
+
+it('ends at once for a blend without lines', () => {
+  expect(storedShares([])).toEqual([]);
+});
