@@ -4,6 +4,7 @@ import { checkNumber, checkWhole, NOT_NEGATIVE } from '../input/fields';
 import { checkProblem } from '../input/problem';
 import { bestLimit, workingLimit } from './best-limit';
 import { closest } from './closest';
+import { confirmed } from './confirmed';
 import { describe } from './describe';
 import { hasDiscreteRules } from './discrete';
 import { prepare } from './prepare';
@@ -49,7 +50,8 @@ export function traceFrontier(problem: BlendProblem, ceilings: number[] | number
     renewLimit(prepared, field, ceiling);
     const found = closest(prepared, near ? { near } : {});
     if (found.kind === 'blend') near = found.point;
-    points.set(ceiling, pointOf(ceiling, describe(prepared, found)));
+    const answer = describe(prepared, found);
+    points.set(ceiling, pointOf(ceiling, confirmed({ ...problem, [field]: ceiling }, answer, prepared.targetSize)));
   }
   return wanted.map((ceiling) => points.get(ceiling)!);
 }

@@ -2,6 +2,7 @@ import type { BlendProblem, BlendSolution, Run } from '../contract';
 import { checkProblem } from '../input/problem';
 import { checkRun } from '../input/run';
 import { closest } from './closest';
+import { confirmed } from './confirmed';
 import { describe } from './describe';
 import { hasDiscreteRules } from './discrete';
 import { describeFewest } from './fewest';
@@ -21,5 +22,6 @@ export function solveBlend(problem: BlendProblem, run?: Run): BlendSolution {
   checkProblem(problem);
   checkRun(run);
   const prepared = prepare(problem);
-  return hasDiscreteRules(problem) ? describeFewest(prepared, run) : describe(prepared, closest(prepared));
+  const answer = hasDiscreteRules(problem) ? describeFewest(prepared, run) : describe(prepared, closest(prepared));
+  return confirmed(problem, answer, prepared.targetSize);
 }
