@@ -47,6 +47,8 @@ export function buildBlendProblem(request: BlendRequest, inputs: BlendInputs): B
   checkNamed(request, all, used);
   const concentrate = request.product ? new Decimal(request.product.concentratePct).div(100).toNumber() : 1;
   const inForce = appliedLimits(request, inputs.limits);
+  const strange = Object.keys(request.importance).find((id) => !inputs.facetIds.includes(id));
+  if (strange !== undefined) throw new RequestFault({ [`importance.${strange}`]: 'The house has no such facet.' });
   const weights = inputs.facetIds.map((id) => request.importance[id] ?? 1);
   if (!weights.some((weight) => weight > 0))
     throw new RequestFault({ importance: 'At least one facet must count for something.' });

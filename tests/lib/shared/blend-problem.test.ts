@@ -83,6 +83,7 @@ it.each([
     }),
     'kept',
   ],
+  ['a facet nobody has', request({ importance: { unheard: 2 } }), 'importance.unheard'],
   ['nothing that matters', request({ importance: { rosy: 0, honeyed: 0, green: 0 } }), 'importance'],
   ['an unknown category', request({ product: { category: '99', concentratePct: '5' } }), 'product.category'],
   [

@@ -59,7 +59,7 @@ export default async function MaterialPage({ params }: Props) {
               <ButtonLink href={`/materials/${material.id}/edit`}>Edit</ButtonLink>
             ) : null}
             {may(ctx.roles, 'blend.solve') && smells ? (
-              <ButtonLink look="solid" href={`/blend?target=material:${material.id}`}>
+              <ButtonLink look="solid" href={`/blend?target=${material.id}`}>
                 Use as target in Blend
               </ButtonLink>
             ) : null}
