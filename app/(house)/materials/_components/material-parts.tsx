@@ -4,6 +4,7 @@ import { Button } from '@/app/_components/ui/button';
 import { Select, TextArea, TextField } from '@/app/_components/ui/field';
 import { KIND_NAMES, MATERIAL_KINDS, STRENGTH_CLASSES } from '@/lib/shared/material-words';
 import type { MaterialDraft } from '../_client/material-draft';
+import { EstimateOffer } from './estimate-offer';
 import { Field, FormPart } from './form-frame';
 
 export interface PartProps {
@@ -170,6 +171,7 @@ export function StrengthPart(part: PartProps) {
       <Text {...part} name="vapourPressureSource" label="Source of the vapour pressure" />
       <Text {...part} name="odourThresholdUgPerM3" label="Odour threshold in air" unit="µg/m³" numeric />
       <Text {...part} name="odourThresholdSource" label="Source of the odour threshold" />
+      <EstimateOffer draft={draft} set={set} />
     </FormPart>
   );
 }

@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Facts, Tile } from '@/app/_components/ui/screen';
+import { proposedStrength } from '@/lib/shared/material-estimate';
 import type { MaterialView } from '@/lib/shared/material-view';
 import { KIND_NAMES } from '@/lib/shared/material-words';
 import { decimalWords, estimateWords, percentWords } from '@/lib/shared/number-words';
@@ -30,6 +31,7 @@ export function Identity({ material: m }: { material: MaterialView }) {
       'Odour threshold',
       m.odourThresholdUgPerM3 !== null && measured(m.odourThresholdUgPerM3, 'µg/m³', m.odourThresholdSource),
     ],
+    ['Strength by these two', estimated(m)],
     ['Evaporation', m.evaporationPerHour !== null && measured(m.evaporationPerHour, 'per hour', m.evaporationSource)],
     ['Usual dilution', m.usualDilution && dilution(m.usualDilution, m.dilutionSolvent)],
     ['Largest share in a concentrate', m.maxShare && percentWords(m.maxShare)],
@@ -45,6 +47,19 @@ export function Identity({ material: m }: { material: MaterialView }) {
       ) : null}
       {m.note ? <p className="mt-4 max-w-prose whitespace-pre-wrap">{m.note}</p> : null}
     </Tile>
+  );
+}
+
+/** Where vapour pressure and threshold are both known: what they speak for, beside what the house set. */
+function estimated(m: MaterialView): ReactNode {
+  if (m.vapourPressurePa === null || m.odourThresholdUgPerM3 === null) return null;
+  const proposal = proposedStrength(m);
+  return (
+    proposal && (
+      <Sourced source={proposal.source}>
+        about {estimateWords(proposal.strength)} per gram, within a factor of {estimateWords(proposal.spread)}
+      </Sourced>
+    )
   );
 }
 
