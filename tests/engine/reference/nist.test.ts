@@ -1,6 +1,7 @@
 import { Matrix } from 'ml-matrix';
 import { describe, expect, it } from 'vitest';
 import { nnls } from '@/engine/solve/nnls';
+import { filip, filipCertified, filipResidual } from './filip';
 
 /** Longley (1967) as certified by NIST StRD: y, then x1 to x6. */
 const longley = [
@@ -66,6 +67,18 @@ describe('NIST statistical reference datasets', () => {
     const wampler2 = powers.map((row) => row.reduce((sum, v, k) => sum + v * 10 ** -k, 0));
     expectRelative(nnls(new Matrix(powers), wampler1).x, [1, 1, 1, 1, 1, 1], 1e-8);
     expectRelative(nnls(new Matrix(powers), wampler2).x, [1, 0.1, 0.01, 1e-3, 1e-4, 1e-5], 1e-8);
+  });
+
+  it('reaches the certified values of Filip, whose powers are dependent but for their last digits', () => {
+    const powers = filip.map(([, x]) => filipCertified.map((_, k) => x ** k));
+    const fit = certifiedFit(
+      powers,
+      filip.map(([y]) => y),
+      filipCertified,
+    );
+    expect(fit.status).toBe('optimal');
+    expectRelative(fit.weights, filipCertified, 1e-5);
+    expectRelative([fit.residualNorm ** 2], [filipResidual], 1e-7);
   });
 
   it('fits the yarn mixture of the NIST handbook, section 5.5.4.2, with and without negative terms', () => {

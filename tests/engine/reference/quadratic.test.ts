@@ -1,3 +1,4 @@
+import { CholeskyDecomposition, Matrix, solve } from 'ml-matrix';
 import { describe, expect, it } from 'vitest';
 import type { BlendProblem, EngineMaterial } from '@/engine/contract';
 import { solveBlend } from '@/engine/solve/solve-blend';
@@ -47,6 +48,40 @@ describe('published least squares and quadratic programmes, posed as blends', ()
     const found = shares(problem, ['x1', 'x2', 'x3']).map((share, j) => (3 * share) / weights[j]!);
     close(found, [4 / 3, 7 / 9, 4 / 9], 9);
     expect(solveBlend(problem).objective).toBeCloseTo(1 / 9, 9);
+  });
+
+  /** min 1/2 x'Hx - c'x with x1 + 2 x2 + x3 + x4 <= 5: impact y_j = w_j x_j / 5, and one material for what is left. */
+  it('solves problem 76 of Hock & Schittkowski: (3/11, 23/11, 0, 6/11), -103/22', () => {
+    const h = new Matrix([
+      [2, 0, -1, 0],
+      [0, 1, 0, 0],
+      [-1, 0, 2, 1],
+      [0, 0, 1, 1],
+    ]);
+    const c = Matrix.columnVector([1, 3, -1, 1]);
+    const factor = new CholeskyDecomposition(h).lowerTriangularMatrix;
+    const target = solve(factor, c).to1DArray();
+    const weights = [1, 2, 1, 1];
+    // 3 x1 + x2 + 2 x3 - x4 <= 4 is a price of at most 9, all prices five higher; x2 + 4 x3 >= 1.5 is a natural share
+    const costs = [20, 7.5, 15, 0];
+    const natural = [0, 0.125, 1, 0];
+    const candidates = weights.map((weight, j) =>
+      material(
+        `x${j + 1}`,
+        factor.getRow(j).map((value) => (5 * value) / weight),
+        { costPerKg: costs[j]!, natural: natural[j]! },
+      ),
+    );
+    const problem: BlendProblem = {
+      target,
+      candidates: [...candidates, material('rest', [0, 0, 0, 0], { costPerKg: 5 })],
+      budgetPerKg: 9,
+      minNatural: 0.075,
+    };
+    const found = shares(problem, ['x1', 'x2', 'x3', 'x4']).map((share, j) => (5 * share) / weights[j]!);
+    close(found, [3 / 11, 23 / 11, 0, 6 / 11], 9);
+    const constant = target.reduce((sum, value) => sum + value * value, 0);
+    expect((solveBlend(problem).objective - constant) / 2).toBeCloseTo(-103 / 22, 9);
   });
 
   it('takes inverse variances where only the spread differs (worked by hand)', () => {
