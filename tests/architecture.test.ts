@@ -137,7 +137,14 @@ it('keeps the root to the agreed names', () => {
     ...FOLDERS,
     ...['public', 'tests', '.ci', 'README.md', 'DEVELOPERS.md'],
     ...['package.json', 'package-lock.json', '.npmrc', '.gitignore', 'tsconfig.json'],
-    ...['next.config.ts', 'proxy.ts', 'instrumentation.ts', 'postcss.config.mjs', 'drizzle.config.ts'],
+    ...[
+      'next.config.ts',
+      'proxy.ts',
+      'instrumentation.ts',
+      'instrumentation-client.ts',
+      'postcss.config.mjs',
+      'drizzle.config.ts',
+    ],
     // Not committed: what tools leave behind.
     ...['.git', 'node_modules', '.next', '.data', 'next-env.d.ts', 'tsconfig.tsbuildinfo', 'coverage'],
   ];

@@ -1,3 +1,4 @@
+import '@/lib/shared/zod-without-eval';
 import { alternativeBlends, certify, EngineInputError, solveBlend } from '@/engine';
 import { type BlendRequest, RequestFault } from '@/lib/shared/blend-input';
 import { type BlendInputs, buildBlendProblem } from '@/lib/shared/blend-problem';
