@@ -18,15 +18,18 @@ export function allowedMethods(url: string): string[] {
 /**
  * Answers 405 to every other method, before Next sees the request: it would answer TRACE with a 500, a changed file
  * likewise, and render a page for DELETE. Neither `proxy.ts` nor a route is asked early enough, and there is no
- * server of our own to ask, so the check goes in where Node hands out requests.
+ * server of our own to ask, so the check goes in where Node hands out requests. The fixed headers go in at the same
+ * place: Next's own redirects, of a slash at the end or two at the beginning, would leave without them.
  */
 export function refuseMethods(): void {
   const emit = Server.prototype.emit as (event: string, ...args: unknown[]) => boolean;
   Server.prototype.emit = function (this: Server, event: string, ...args: unknown[]) {
     const [request, response] = args as [IncomingMessage, ServerResponse];
-    if (event !== 'request' || isAllowed(request)) return emit.call(this, event, ...args);
+    if (event !== 'request') return emit.call(this, event, ...args);
+    for (const [name, value] of Object.entries(FIXED_HEADERS)) response.setHeader(name, value);
+    if (isAllowed(request)) return emit.call(this, event, ...args);
     const allow = allowedMethods(request.url ?? '').join(', ');
-    response.writeHead(405, { ...FIXED_HEADERS, Allow: allow, 'Cache-Control': 'no-store' }).end();
+    response.writeHead(405, { Allow: allow, 'Cache-Control': 'no-store' }).end();
     return true;
   };
 }

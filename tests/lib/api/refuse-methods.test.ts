@@ -44,5 +44,7 @@ it.each([
   ['PATCH', '/api/v1/materials/1'],
   ['DELETE', '/api/v1/blends/1'],
 ])('hands on %s %s', async (method, path) => {
-  expect((await ask(method, path)).statusCode).toBe(200);
+  const response = await ask(method, path);
+  expect(response.statusCode).toBe(200);
+  expect(response.headers).toHaveProperty('strict-transport-security');
 });
