@@ -1,7 +1,8 @@
 import type { Run } from '../contract';
-import { closest } from './closest';
+import { type Closest, closest } from './closest';
 import { mandatory } from './discrete';
-import type { Evidence } from './evidence';
+import { type Evidence, ROUNDING, rowSize } from './evidence';
+import { rowSum } from './forced-out';
 import { Heap } from './heap';
 import { OneMore } from './one-more';
 import type { Prepared } from './prepare';
@@ -37,8 +38,8 @@ const PRUNE = 5e-10;
  *
  * The relaxation drops both rules: the convex problem without the materials that are out. A material of the largest
  * impact is then taken to be used for certain (the relaxation stays as it is, but for its smallest dose) or to be out
- * (solved again from where it stood). With one place left, `OneMore` bounds every material that could take it, and only
- * those that might win are solved. Blends found by rounding and by exchanging one line at a time come first, so that
+ * (solved again from where it stood). With one place left, `OneMore` bounds every material that could take it, at the
+ * rules' prices of the sets solved before, and only those that might win are solved. Blends found by rounding and by exchanging one line at a time come first, so that
  * most nodes need not be opened. It ends when no node left is better than the best blend, or when time is out.
  */
 export function searchBlend(prepared: Prepared, run: Run = {}, mostNodes = MOST_NODES): SearchResult {
@@ -129,7 +130,7 @@ class Search {
   private branch(node: Node): void {
     const free = this.freeOf(node);
     if (this.places - node.ins.length === 1) {
-      this.fillLastPlace(node.ins, free, node.bound);
+      this.fillLastPlace(node.ins, free, node);
       return;
     }
     const next = this.branchingMaterial(node);
@@ -158,28 +159,71 @@ class Search {
     return best;
   }
 
-  /** Every material that may take the last place, by its bound; and the set as it is. */
-  private fillLastPlace(ins: readonly number[], free: readonly number[], bound: number): void {
-    const bounds = this.oneMore.bounds(ins, free);
-    const order = free.map((_, k) => k).sort((a, b) => bounds[a]! - bounds[b]! || a - b);
-    for (const k of order) {
-      const reached = Math.max(bound, bounds[k]!);
-      if (reached >= this.cutoff()) {
-        this.discarded = Math.min(this.discarded, reached);
-        break;
+  /**
+   * Every material that may take the last place, least bound first; and the set as it is. What each trial teaches goes
+   * on to the rest: its multipliers price the rules for the next bounds, and the weights that prove that it allows no
+   * blend prove it for every material that they charge as well.
+   */
+  private fillLastPlace(
+    ins: readonly number[],
+    free: readonly number[],
+    { bound, evidence }: Pick<Node, 'bound' | 'evidence'>,
+  ): void {
+    // a smallest dose makes the last material cost something: without one, any blend of `ins` is among the others
+    if (this.prepared.problem.minDose || free.length === 0) this.tryMaterials(ins);
+    const priced = this.oneMore.beside(ins, free);
+    const bounds = priced().map((value) => Math.max(value, bound));
+    const raise = (lambda: Float64Array) => {
+      const again = priced(this.withoutDoses(lambda, ins));
+      for (let k = 0; k < bounds.length; k++) bounds[k] = Math.max(bounds[k]!, again[k]!);
+    };
+    raise(evidence.lambda);
+    for (let left = free.length; left > 0; left--) {
+      const k = leastOf(bounds);
+      if (bounds[k]! >= this.cutoff()) {
+        this.discarded = Math.min(this.discarded, bounds[k]!);
+        return;
       }
-      this.tryMaterials([...ins, free[k]!]);
+      bounds[k] = Number.POSITIVE_INFINITY;
+      const found = this.tryMaterials([...ins, free[k]!]);
+      if (found.kind === 'blend') raise(found.evidence.lambda);
+      else for (const too of this.chargedToo(found.weights, ins, free)) bounds[too] = Number.POSITIVE_INFINITY;
     }
   }
 
+  /** Multipliers that hold for `ins` and any other material: those of smallest doses of others are not owed. */
+  private withoutDoses(lambda: Float64Array, ins: readonly number[]): Float64Array {
+    const { rules } = this.prepared;
+    return lambda.map((value, r) => {
+      const { doseOf, kind } = rules[r]!;
+      if (doseOf !== undefined && !ins.includes(doseOf)) return 0;
+      return kind === 'exact' ? value : Math.max(0, value);
+    });
+  }
+
+  /**
+   * The places in `free` of the materials that no blend with `ins` can use, by Farkas' weights of another such set: where
+   * every charge is a good part of s_i, the rules added up would demand that the whole impact is nothing.
+   */
+  private chargedToo(weights: Float64Array, ins: readonly number[], free: readonly number[]): number[] {
+    const { strength } = this.prepared;
+    const owed = this.withoutDoses(weights, ins);
+    const charged = (i: number) => {
+      const charge = rowSum(this.prepared, owed, i);
+      return strength[i] === 0 ? charge >= 0 : charge - ROUNDING * rowSize(this.prepared, owed, i) >= strength[i]! / 2;
+    };
+    return ins.every(charged) ? free.flatMap((i, k) => (charged(i) ? [k] : [])) : [];
+  }
+
   /** The closest blend of these alone; where one of them is not wanted it stays away, unless its dose keeps it in. */
-  private tryMaterials(materials: readonly number[]): void {
+  private tryMaterials(materials: readonly number[]): Closest {
     this.nodes++;
     const found = closestOf(this.prepared, materials, this.dosesOf(materials));
     this.iterations += found.iterations;
-    if (found.kind === 'none') return;
+    if (found.kind === 'none') return found;
     this.discarded = Math.min(this.discarded, Math.max(found.evidence.bound, 0));
     if (this.isBlend(found.point)) this.accept(found.point, found.evidence);
+    return found;
   }
 
   private accept(point: Point, evidence: Evidence): void {
@@ -213,7 +257,7 @@ class Search {
       for (const gone of lines) {
         if (root.ins.includes(gone)) continue;
         const rest = [...new Set([...root.ins, ...lines.filter((i) => i !== gone)])];
-        this.fillLastPlace(rest, this.freeOf({ ins: rest, outs: [] }), 0);
+        this.fillLastPlace(rest, this.freeOf({ ins: rest, outs: [] }), { bound: 0, evidence: before.evidence });
       }
       found = this.best !== before;
     }
@@ -242,4 +286,10 @@ class Search {
 function sharesOf({ grams }: Point): number[] {
   const mass = grams.reduce((sum, z) => sum + z, 0);
   return grams.map((z) => z / mass);
+}
+
+function leastOf(values: Float64Array): number {
+  let least = 0;
+  for (let k = 1; k < values.length; k++) if (values[k]! < values[least]!) least = k;
+  return least;
 }

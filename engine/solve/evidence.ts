@@ -102,7 +102,7 @@ function leastValue(prepared: Prepared, { lambda, lift, slope }: Priced, among?:
 }
 
 /** Rounding of G'lambda, in terms of the size of what is summed. */
-const ROUNDING = 2e-14;
+export const ROUNDING = 2e-14;
 
 /**
  * A solvent in use has (G'lambda)_i = 0 but for rounding, and rounding below 0 would leave no bound at all. The rule
@@ -122,7 +122,7 @@ export function liftOdourless(prepared: Prepared, lambda: Float64Array, allowed:
 }
 
 /** The size of what `rowSum` sums. */
-function rowSize({ base, start, row, entry }: Prepared, lambda: Float64Array, i: number): number {
+export function rowSize({ base, start, row, entry }: Prepared, lambda: Float64Array, i: number): number {
   let size = 0;
   for (let r = 0; r < lambda.length; r++) size += Math.abs(lambda[r]! * base[r]!);
   for (let at = start[i]!; at < start[i + 1]!; at++) size += Math.abs(lambda[row[at]!]! * entry[at]!);

@@ -1,12 +1,17 @@
+import { liftOf } from './forced-out';
 import type { Prepared } from './prepare';
 import { product } from './triangle';
 
 /**
  * For a set S of materials, a bound on how close S and one more could come: the least E over all weights of S and j that
- * sum to 1, of either sign and without rules. One factor of S serves every j, so that a set costs microseconds.
+ * sum to 1, of either sign, with the rules priced at multipliers lambda >= 0 instead of kept. One factor of S serves
+ * every j and every lambda, so that a set costs microseconds.
  *
- *     y of S and the price mu from [H 1; 1' 0],  slope_j = H_jS y - h_j + mu,  room_j = H_jj - [H_jS 1] M^-1 [H_Sj; 1]
+ *     h_i = a_i.t - (G'lambda)_i / (2 s_i),   y of S and the price mu from [H 1; 1' 0],
+ *     slope_j = H_jS y - h_j + mu,   room_j = H_jj - [H_jS 1] M^-1 [H_Sj; 1]
  *     E(S + j) >= E(S) - slope_j^2 / room_j
+ *
+ * Any lambda gives a bound; good ones are those of a set much like this one.
  */
 export class OneMore {
   private readonly pull: Float64Array;
@@ -20,30 +25,65 @@ export class OneMore {
     this.gram = count <= GRAM_UP_TO ? new Float64Array(count * count).fill(Number.NaN) : null;
   }
 
-  /** The bound for each material in `free`, in its order; the smallest first costs nothing more than a sort. */
-  bounds(chosen: readonly number[], free: readonly number[]): Float64Array {
-    const size = chosen.length;
+  /** The bounds for S and each material in `free`, in its order, at the prices of any number of lambdas. */
+  beside(chosen: readonly number[], free: readonly number[]): (lambda?: Float64Array) => Float64Array {
     const inverse = this.inverse(chosen);
-    if (!inverse) return new Float64Array(free.length);
+    if (!inverse) return () => new Float64Array(free.length);
+    const factor = this.factor(chosen, free, inverse);
+    return (lambda) => {
+      const start = this.start(factor, lambda);
+      return Float64Array.from(free, (_, k) => {
+        const slope = start?.slopes[k] ?? Number.NaN;
+        const room = factor.room[k]!;
+        return start && room > 0 && !Number.isNaN(slope) ? start.own - (slope * slope) / room : 0;
+      });
+    };
+  }
+
+  private factor(chosen: readonly number[], free: readonly number[], inverse: Float64Array): Factor {
+    const size = chosen.length;
+    const columns = new Float64Array(free.length * size);
+    const column = new Float64Array(size + 1).fill(1);
+    const room = Float64Array.from(free, (j, k) => {
+      for (let a = 0; a < size; a++) column[a] = this.inner(chosen[a]!, j);
+      columns.set(column.subarray(0, size), k * size);
+      const left = this.inner(j, j) - quadratic(inverse, column, size + 1);
+      return left > 1e-9 * this.inner(j, j) ? left : 0;
+    });
+    return { chosen, free, inverse, columns, room };
+  }
+
+  /** The least E over the weights of S alone at these prices, and its slope towards each material; null for no bound. */
+  private start({ chosen, free, inverse, columns }: Factor, lambda?: Float64Array): Start | null {
+    const size = chosen.length;
+    const lift = lambda ? liftOf(this.prepared, lambda) : 0;
+    const price = (i: number) => (lambda ? this.priceOf(i, lambda, lift) : 0);
+    const pull = Float64Array.from(chosen, (i) => this.pull[i]! - price(i) / 2);
+    if (pull.some(Number.isNaN)) return null;
     const weights = new Float64Array(size + 1);
     for (let a = 0; a <= size; a++) {
-      for (let b = 0; b <= size; b++) {
-        weights[a]! += inverse[a * (size + 1) + b]! * (b < size ? this.pull[chosen[b]!]! : 1);
-      }
+      for (let b = 0; b <= size; b++) weights[a]! += inverse[a * (size + 1) + b]! * (b < size ? pull[b]! : 1);
     }
     let own = this.constant - weights[size]!;
-    for (let a = 0; a < size; a++) own -= weights[a]! * this.pull[chosen[a]!]!;
-    const column = new Float64Array(size + 1);
-    return Float64Array.from(free, (j) => {
-      let slope = weights[size]! - this.pull[j]!;
-      for (let a = 0; a < size; a++) {
-        column[a] = this.inner(chosen[a]!, j);
-        slope += column[a]! * weights[a]!;
-      }
-      column[size] = 1;
-      const room = this.inner(j, j) - quadratic(inverse, column, size + 1);
-      return room > 1e-9 * this.inner(j, j) ? own - (slope * slope) / room : 0;
+    let terms = this.constant + Math.abs(weights[size]!);
+    for (let a = 0; a < size; a++) {
+      own -= weights[a]! * pull[a]!;
+      terms += Math.abs(weights[a]! * pull[a]!);
+    }
+    const slopes = Float64Array.from(free, (j, k) => {
+      let slope = weights[size]! - this.pull[j]! + price(j) / 2;
+      for (let a = 0; a < size; a++) slope += columns[k * size + a]! * weights[a]!;
+      return slope;
     });
+    return { own: own - ROUNDING * terms, slopes };
+  }
+
+  /** (G'lambda)_i / s_i; a solvent has no impact, and must only not be paid for: NaN where it is. */
+  private priceOf(i: number, lambda: Float64Array, lift: number): number {
+    const { strength, start, row, entry } = this.prepared;
+    let sum = lift;
+    for (let at = start[i]!; at < start[i + 1]!; at++) sum += lambda[row[at]!]! * entry[at]!;
+    return strength[i]! > 0 ? sum / strength[i]! : sum >= 0 ? 0 : Number.NaN;
   }
 
   private inner(i: number, j: number): number {
@@ -76,6 +116,22 @@ export class OneMore {
   }
 }
 
+/** What is known of a set, whatever the prices are. */
+interface Factor {
+  chosen: readonly number[];
+  free: readonly number[];
+  inverse: Float64Array;
+  columns: Float64Array;
+  room: Float64Array;
+}
+
+interface Start {
+  own: number;
+  slopes: Float64Array;
+}
+
+/** A bound gives this share of its terms to rounding. */
+const ROUNDING = 1e-13;
 /** Up to here all inner products are kept; above, the table would not fit a browser's memory. */
 const GRAM_UP_TO = 2000;
 

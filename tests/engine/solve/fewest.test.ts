@@ -45,7 +45,7 @@ const counted = (shape: Parameters<typeof linearProblem>[0]) =>
     .record({
       problem: linearProblem(shape),
       maxMaterials: fc.integer({ min: 1, max: 4 }),
-      minDose: fc.constantFrom(0, 0, 0.02, 0.1),
+      minDose: fc.constantFrom(undefined, undefined, 0.02, 0.1),
     })
     .map(({ problem, ...rules }) => ({ ...problem, ...rules }));
 
@@ -116,6 +116,16 @@ describe('rules that count materials', () => {
 
   it('answers the same every time', () => {
     expect(solveBlend(many)).toEqual(solveBlend({ ...many, candidates: [...many.candidates].reverse() }));
+  });
+
+  it('leaves the last place empty where the smallest dose of any more material is too much of it', () => {
+    const make = (id: string, profile: number[]) => ({ id, profile, strength: 1, costPerKg: 1 });
+    const candidates = [make('a', [10, 0, 0]), make('b', [9.9, 10, 0]), make('c', [9.9, 0, 10])];
+    const problem: BlendProblem = { target: [10, 0.1, 0.1], candidates, maxMaterials: 2, minDose: 0.1 };
+    const { status, lines } = solveBlend(problem);
+    expect(status).toBe('optimal');
+    expect(lines.map(({ id }) => id)).toEqual(['a']);
+    expectBest(problem);
   });
 
   it('names the count that cannot be kept, and the least that can', () => {
