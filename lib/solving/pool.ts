@@ -6,6 +6,7 @@ import Piscina from 'piscina';
 import type { BetterBlend, BlendProblem, BlendSolution, Certificate } from '@/engine/contract';
 import { EngineInputError } from '@/engine/errors';
 import { TooMany } from '@/lib/errors';
+import { log } from '@/lib/log';
 
 /** Solves that wait beyond those at work; one more is refused. */
 export const MAX_QUEUE = 16;
@@ -29,7 +30,8 @@ export interface SolveOptions {
 const kept = globalThis as { stillroomSolvers?: Piscina };
 
 function pool(): Piscina {
-  kept.stillroomSolvers ??= new Piscina({
+  if (kept.stillroomSolvers) return kept.stillroomSolvers;
+  const solvers = new Piscina({
     filename: path.join(process.cwd(), 'lib/solving/worker.mjs'),
     minThreads: 0,
     maxThreads: Math.max(1, availableParallelism() - 1),
@@ -37,7 +39,11 @@ function pool(): Piscina {
     maxQueue: MAX_QUEUE,
     resourceLimits: { maxOldGenerationSizeMb: THREAD_MB },
   });
-  return kept.stillroomSolvers;
+  // A thread may answer in the very moment in which its solve is given up; unheard, that error would end the process.
+  // Its text holds the answer, a formula, and so stays out of the log.
+  solvers.on('error', () => log.warn({ event: 'solver_thread_error' }));
+  kept.stillroomSolvers = solvers;
+  return solvers;
 }
 
 /**

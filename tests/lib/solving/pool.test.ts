@@ -1,8 +1,9 @@
-import { afterAll, expect, it } from 'vitest';
+import { afterAll, expect, it, vi } from 'vitest';
 import type { BlendProblem } from '@/engine/contract';
 import { EngineInputError } from '@/engine/errors';
 import { solveBlend } from '@/engine/index';
 import { TooMany } from '@/lib/errors';
+import { log } from '@/lib/log';
 import { closePool, MAX_QUEUE, solveInPool } from '@/lib/solving/pool';
 
 afterAll(closePool);
@@ -35,6 +36,29 @@ it('ends at once when asked to', async () => {
   controller.abort();
   await expect(work).rejects.toThrow(/abort/i);
   expect((await solveInPool(small, minute)).solution.status).toBe('optimal');
+});
+
+it('survives being given up at any moment, that of the answer too', async () => {
+  const logged = vi.spyOn(log, 'warn').mockImplementation(() => undefined);
+  for (let turn = 0; turn < 30; turn++) {
+    const controller = new AbortController();
+    const work = solveInPool(small, { ...minute, signal: controller.signal, onBetter: () => undefined });
+    for (let wait = 0; wait < turn * 4; wait++) await new Promise((resolve) => setImmediate(resolve));
+    controller.abort();
+    await work.catch((error: unknown) => expect(String(error)).toMatch(/abort/i));
+  }
+  expect((await solveInPool(small, minute)).solution.status).toBe('optimal');
+  expect(JSON.stringify(logged.mock.calls)).not.toContain('lines');
+});
+
+it('takes what a thread says too late as no reason to end', async () => {
+  const logged = vi.spyOn(log, 'warn').mockImplementation(() => undefined);
+  await solveInPool(small, minute);
+  const pool = (globalThis as { stillroomSolvers?: { emit: (name: string, error: Error) => boolean } })
+    .stillroomSolvers;
+  pool?.emit('error', new Error('Unexpected message from Worker: { lines: [secret] }'));
+  expect(logged).toHaveBeenCalledTimes(1);
+  expect(JSON.stringify(logged.mock.calls)).not.toContain('secret');
 });
 
 it('refuses one more than the queue holds, and does the rest', async () => {
