@@ -36,8 +36,8 @@ const PRUNE = 5e-10;
 /**
  * At most k materials, and no used one below its smallest dose: branch and bound (Land & Doig 1960), best bound first.
  *
- * The relaxation drops both rules: the convex problem without the materials that are out. A material of the largest
- * impact is then taken to be used for certain (the relaxation stays as it is, but for its smallest dose) or to be out
+ * The relaxation drops both rules: the convex problem without the materials that are out. The material that would be
+ * missed most is then taken to be used for certain (the relaxation stays as it is, but for its smallest dose) or to be out
  * (solved again from where it stood). With one place left, `OneMore` bounds every material that could take it, at the
  * rules' prices of the sets solved before, and only those that might win are solved. Blends found by rounding and by exchanging one line at a time come first, so that
  * most nodes need not be opened. It ends when no node left is better than the best blend, or when time is out.
@@ -145,7 +145,7 @@ class Search {
     return Array.from({ length: this.prepared.count }, (_, i) => i).filter((i) => !fixed.has(i));
   }
 
-  /** With too many materials the one of most impact; otherwise the one furthest below its smallest dose. */
+  /** With too many materials the one that would be missed most, |y_i a_i|^2 + v_i y_i^2; otherwise the most underdosed. */
   private branchingMaterial({ ins, point }: Node): number {
     const crowded = point.materials.length > this.places;
     const shares = sharesOf(point);
@@ -153,7 +153,8 @@ class Search {
     let most = Number.NEGATIVE_INFINITY;
     for (const [k, i] of point.materials.entries()) {
       if (ins.includes(i) || (!crowded && !this.isUnderdosed(i, shares[k]!))) continue;
-      const weight = crowded ? point.grams[k]! * this.prepared.strength[i]! : -shares[k]!;
+      const impact = point.grams[k]! * this.prepared.strength[i]!;
+      const weight = crowded ? impact * impact * this.prepared.curvature[i]! : -shares[k]!;
       if (weight > most || (weight === most && i < best)) [best, most] = [i, weight];
     }
     return best;
