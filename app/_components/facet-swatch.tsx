@@ -15,12 +15,3 @@ export function FacetSwatch({ facet, className }: { facet: FacetTone | null; cla
     </svg>
   );
 }
-
-export function FacetWord({ facet, className = '' }: { facet: FacetTone; className?: string }) {
-  return (
-    <span className={`inline-flex items-center gap-2 ${className}`}>
-      <FacetSwatch facet={facet} />
-      {facet.name}
-    </span>
-  );
-}

@@ -1,7 +1,5 @@
 import { z } from 'zod';
 
-export const EXPOSURES = ['leave-on', 'rinse-off', 'oral', 'household', 'no skin contact'] as const;
-
 export const categoryView = z.strictObject({
   code: z.string(),
   name: z.string(),

@@ -1,7 +1,6 @@
-import { infiniteQueryOptions, queryOptions } from '@tanstack/react-query';
+import { infiniteQueryOptions } from '@tanstack/react-query';
 import { callApi } from '@/lib/shared/api-client';
 import type { MaterialPage } from '@/lib/shared/material';
-import type { MaterialView } from '@/lib/shared/material-view';
 
 /** Beyond so many rows the list asks for a narrower search instead of loading on. */
 export const MOST_ROWS = 2000;
@@ -9,7 +8,6 @@ export const MOST_ROWS = 2000;
 export const materialKeys = {
   all: ['materials'] as const,
   list: (query: string) => [...materialKeys.all, 'list', query] as const,
-  one: (id: string) => [...materialKeys.all, 'one', id] as const,
 };
 
 export const materialListOptions = (query: string) =>
@@ -22,10 +20,4 @@ export const materialListOptions = (query: string) =>
       const rows = pages.reduce((sum, { items }) => sum + items.length, 0);
       return rows >= MOST_ROWS ? undefined : last.nextCursor;
     },
-  });
-
-export const materialOptions = (id: string) =>
-  queryOptions({
-    queryKey: materialKeys.one(id),
-    queryFn: ({ signal }) => callApi<MaterialView>(`/api/v1/materials/${id}`, { signal }),
   });
